@@ -1,3 +1,10 @@
+import type { Chamber } from './chamber'
+import type { CrankUnbalance } from './crank-unbalance'
+import type { DeadCentres } from './dead-centres'
+import type { GasPlan } from './gas'
+import type { Carried } from './lever-rule'
+import type { RodMotion } from './rod-motion'
+import type { RodPath } from './rod-path'
 import type { Train } from './train'
 
 /**
@@ -35,10 +42,25 @@ export interface Instant {
   shakingHorizontal: number
   coupleVertical: number
   coupleHorizontal: number
+  /** Motion of every rod per radian, in its cylinder's frame: what the rest is made from. */
+  motion: RodMotion
+  /** What the links put on each master rod: force, and moment about its big end. Private to fillInstant. */
+  carried: { vertical: Float64Array; horizontal: Float64Array; moment: Float64Array }
 }
 
 /** What is fixed while a train runs at one speed: exact dead centres, firing angles, the gas tables, lever arms. */
 export interface Plan {
   readonly train: Train
   readonly speed: number // rad/s
+  readonly paths: readonly RodPath[]
+  readonly centres: readonly DeadCentres[]
+  /** Firing angle of each cylinder, rad. */
+  readonly fires: Float64Array
+  /** Cylinders with every master before its links. */
+  readonly sequence: Int32Array
+  readonly chambers: readonly Chamber[]
+  readonly gas: GasPlan
+  readonly unbalance: CrankUnbalance
+  /** The mains that carry each cylinder's pin load; empty with fewer than two mains. */
+  readonly carriedBy: readonly Carried[]
 }
