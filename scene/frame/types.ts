@@ -37,8 +37,20 @@ export interface Surface {
 }
 
 export type PartKind =
-  | 'main-journal' | 'crank-pin' | 'web' | 'counterweight' | 'flywheel' | 'free-end'
-  | 'rod' | 'rod-cap' | 'piston' | 'ring' | 'piston-pin' | 'liner' | 'main-bearing' | 'balance-shaft'
+  | 'main-journal'
+  | 'crank-pin'
+  | 'web'
+  | 'counterweight'
+  | 'flywheel'
+  | 'free-end'
+  | 'rod'
+  | 'rod-cap'
+  | 'piston'
+  | 'ring'
+  | 'piston-pin'
+  | 'liner'
+  | 'main-bearing'
+  | 'balance-shaft'
 
 /** What can be shown and hidden together. */
 export type PartGroup = 'crank' | 'rods' | 'pistons' | 'bores' | 'flywheel' | 'shafts'
