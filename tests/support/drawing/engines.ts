@@ -4,9 +4,9 @@ import { fillViewProjection, frameCamera } from '@/scene/frame/camera'
 import { buildPose, fillPose } from '@/scene/frame/pose'
 import type { Rig } from '@/scene/frame/types'
 import { defaultPitch, defaultYaw } from '@/scene/frame/view-direction'
-import type { RasterFrame } from '@/scene/canvas/raster/raster'
 import { crankTrainSchema } from '@/scene/model/crank-train'
 import { toTrain } from '@/scene/model/to-train'
+import type { RasterFrame } from '@/scene/canvas/raster/types'
 
 const folder = new URL('../../../scene/model/presets/', import.meta.url)
 

@@ -1,14 +1,9 @@
 import { paint } from '@/scene/canvas/raster/paint'
 import type { RigShape } from '@/scene/canvas/raster/prepare'
-import {
-  createRaster,
-  setSize,
-  setVisibility,
-  type Raster,
-  type RasterFrame,
-} from '@/scene/canvas/raster/raster'
+import { createRaster, setSize, setVisibility } from '@/scene/canvas/raster/raster'
 import type { InkTheme } from '@/scene/frame/types'
 import { vellum } from './small-rig'
+import type { Raster, RasterFrame } from '@/scene/canvas/raster/types'
 
 export interface Sheet {
   theme?: InkTheme

@@ -4,7 +4,7 @@ import { rectangle, type Outline } from '@/scene/frame/mesh/outline'
 import { addPrism } from '@/scene/frame/mesh/prism'
 import type { InkTheme, Mesh, Part } from '@/scene/frame/types'
 import type { RigShape } from '@/scene/canvas/raster/prepare'
-import type { RasterFrame } from '@/scene/canvas/raster/raster'
+import type { RasterFrame } from '@/scene/canvas/raster/types'
 
 export const vellum: InkTheme = {
   paper: 0xf5f2ea, part: 0xe9e5d9, metal: 0xfbfaf6, ink: 0x20262b, line: 0x747a7c,

@@ -1,0 +1,3 @@
+// at: components/bench/canary.tsx
+// breaks: boundaries/dependencies
+export * from '@/lib/auth/tokens'

@@ -1,0 +1,2 @@
+import { b } from './b'
+export const a = () => b

@@ -1,0 +1,2 @@
+import { a } from './a'
+export const b = () => a

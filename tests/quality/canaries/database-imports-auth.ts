@@ -1,0 +1,3 @@
+// at: db/canary.ts
+// breaks: boundaries/dependencies
+export * from '@/lib/auth/tokens'

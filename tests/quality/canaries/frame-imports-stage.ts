@@ -1,0 +1,3 @@
+// at: scene/frame/canary.ts
+// breaks: boundaries/dependencies
+export type { Stage } from '@/scene/stage/types'

@@ -1,0 +1,3 @@
+// at: lib/mechanics/canary.ts
+// breaks: boundaries/dependencies
+export type { Scene } from '@/scene/model/scene'

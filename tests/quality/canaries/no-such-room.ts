@@ -1,0 +1,3 @@
+// at: lib/elsewhere/canary.ts
+// breaks: boundaries/no-unknown-files
+export const lost = true

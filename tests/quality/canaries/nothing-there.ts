@@ -1,0 +1,3 @@
+// at: lib/mechanics/canary.ts
+// breaks: boundaries/dependencies
+export * from '@/lib/numerics/nothing-there'

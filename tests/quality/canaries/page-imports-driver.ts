@@ -1,0 +1,3 @@
+// at: app/canary.tsx
+// breaks: boundaries/dependencies
+export { default } from 'postgres'

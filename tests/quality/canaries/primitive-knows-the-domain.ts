@@ -1,0 +1,3 @@
+// at: components/ui/canary.tsx
+// breaks: boundaries/dependencies
+export type { Scene } from '@/scene/model/scene'

@@ -1,0 +1,3 @@
+// at: lib/numerics/canary.ts
+// breaks: boundaries/dependencies
+export { derivative } from 'mathjs'

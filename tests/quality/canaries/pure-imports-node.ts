@@ -1,0 +1,3 @@
+// at: lib/units/canary.ts
+// breaks: boundaries/dependencies
+export { readFileSync } from 'node:fs'

@@ -1,0 +1,3 @@
+// at: scene/frame/canary.ts
+// breaks: boundaries/dependencies
+export { Vector3 } from 'three'

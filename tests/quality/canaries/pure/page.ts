@@ -1,0 +1,2 @@
+export const width = () => document.body.clientWidth
+export const home = () => process.env.HOME

@@ -1,0 +1,3 @@
+// at: scene/webgl/canary.tsx
+// breaks: boundaries/dependencies
+export type { Clock } from '@/scene/session/clock'

@@ -1,0 +1,3 @@
+// at: scene/stage/canary.ts
+// breaks: boundaries/dependencies
+export { Dialog } from '@/components/ui/dialog'

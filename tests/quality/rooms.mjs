@@ -1,0 +1,118 @@
+// The one-way rule of the house as data: what each room may import from other rooms and from packages.
+// Whatever is not listed is refused, type imports too. `node: true` lets Node's built-ins in.
+
+const numbers = ['units', 'numerics']
+const kernel = [...numbers, 'mechanics']
+const pureRooms = [...kernel, 'model', 'frame']
+
+/** Rooms that run unchanged in a page, a worker and a server: no page, no built-ins, no clock, no chance. */
+export const pure = ['lib/units', 'lib/numerics', 'lib/mechanics', 'scene/model', 'scene/frame']
+
+const react = ['react', 'react-dom']
+const three = ['three', '@react-three/fiber', '@react-three/drei']
+
+export const rooms = {
+  units: { folder: 'lib/units', rooms: [], packages: [] },
+  numerics: { folder: 'lib/numerics', rooms: [], packages: [] },
+  mechanics: { folder: 'lib/mechanics', rooms: numbers, packages: [] },
+  model: { folder: 'scene/model', rooms: kernel, packages: ['zod'] },
+  frame: { folder: 'scene/frame', rooms: [...kernel, 'model'], packages: ['earcut'] },
+
+  canvas: { folder: 'scene/canvas', rooms: ['frame'], packages: [] },
+  webgl: { folder: 'scene/webgl', rooms: ['frame'], packages: [...react, ...three] },
+  stage: { folder: 'scene/stage', rooms: [...pureRooms, 'canvas', 'webgl', 'clock'], packages: react },
+  session: {
+    folder: 'scene/session',
+    rooms: [...pureRooms, 'stage', 'clock'],
+    packages: ['react', 'zustand'],
+  },
+
+  ui: { folder: 'components/ui', rooms: [], packages: [...react, 'next'] },
+  shell: { folder: 'components/shell', rooms: ['ui'], packages: [...react, 'next'] },
+  drawing: {
+    folder: 'components/drawing',
+    rooms: [...pureRooms, 'ui', 'stage', 'session', 'clock'],
+    packages: [...react, 'next'],
+  },
+  feature: {
+    folder: 'components/*',
+    rooms: [
+      ...pureRooms,
+      'ui',
+      'shell',
+      'drawing',
+      'stage',
+      'session',
+      'clock',
+      'contracts',
+      'errors',
+      'access',
+    ],
+    packages: [...react, 'next', 'swr', 'zod', 'zustand'],
+  },
+
+  contracts: { folder: 'lib/contracts', rooms: [...pureRooms, 'access'], packages: ['zod', 'zod-openapi'] },
+  errors: { folder: 'lib/errors', rooms: [], packages: ['zod'] },
+  config: { folder: 'lib/config', rooms: [], packages: ['zod', 'server-only'], node: true },
+  migrations: { folder: 'drizzle', rooms: [] },
+  database: {
+    folder: 'db',
+    rooms: [...pureRooms, 'migrations', 'config', 'contracts', 'errors'],
+    packages: ['drizzle-orm', 'postgres', 'server-only', 'zod', '@node-rs/argon2'],
+    node: true,
+  },
+  adapters: {
+    folder: 'lib/adapters',
+    rooms: ['config', 'errors'],
+    packages: ['server-only', 'zod'],
+    node: true,
+  },
+  auth: {
+    folder: 'lib/auth',
+    rooms: ['database', 'config', 'contracts', 'errors'],
+    packages: [
+      'lucia',
+      '@lucia-auth/adapter-drizzle',
+      '@node-rs/argon2',
+      'drizzle-orm',
+      'next',
+      'react',
+      'server-only',
+      'zod',
+    ],
+    node: true,
+  },
+  services: {
+    folder: 'lib/services',
+    rooms: [...pureRooms, 'database', 'adapters', 'auth', 'config', 'contracts', 'errors'],
+    packages: ['drizzle-orm', 'server-only', 'sharp', 'zod'],
+    node: true,
+  },
+  http: {
+    folder: 'lib/http',
+    rooms: ['auth', 'config', 'contracts', 'errors', 'services'],
+    packages: ['next', 'server-only', 'zod', 'zod-openapi'],
+    node: true,
+  },
+
+  app: {
+    folder: 'app',
+    rooms: [
+      ...pureRooms,
+      ...['ui', 'shell', 'drawing', 'feature', 'session', 'clock', 'stage', 'canvas'],
+      ...['contracts', 'errors', 'config', 'auth', 'services', 'http', 'adapters'],
+    ],
+    packages: [...react, 'next', 'server-only', 'swr', 'zod', 'zod-openapi'],
+    node: true,
+  },
+}
+
+/** Single files that are open to more than their room is, or may reach further. */
+export const doors = {
+  // the table of roles and what they may do: plain data, one source for server, page and tests
+  access: { file: 'lib/auth/access.ts', room: 'auth' },
+  clock: { file: 'scene/session/clock.ts', room: 'session' },
+  health: { file: 'app/api/v1/health/route.ts', room: 'app', rooms: ['database'] },
+  // reads the services, which are TypeScript, before any build is there
+  seed: { file: 'db/seed.mjs', room: 'database', packages: ['vite'] },
+}

@@ -1,0 +1,34 @@
+import { fileURLToPath } from 'node:url'
+import { defineConfig } from 'vitest/config'
+
+const root = fileURLToPath(new URL('../..', import.meta.url))
+const support = `${root}tests/support/`
+
+const project = (name: string, more: object = {}) => ({
+  extends: true as const,
+  test: { name, include: [`tests/${name}/**/*.test.{ts,tsx}`], ...more },
+})
+
+export default defineConfig({
+  root,
+  cacheDir: `${root}node_modules/.vitest`,
+  resolve: {
+    alias: [
+      { find: /^@\//, replacement: root },
+      // outside a server bundle its only content is an error
+      { find: /^server-only$/, replacement: `${support}empty.ts` },
+    ],
+  },
+  test: {
+    environment: 'node',
+    testTimeout: 30_000,
+    hookTimeout: 60_000,
+    projects: [
+      project('unit'),
+      project('bench', { include: [], benchmark: { include: ['tests/bench/**/*.bench.ts'] } }),
+      project('golden'),
+      project('rendering'),
+      project('integration', { globalSetup: `${support}cluster.mjs` }),
+    ],
+  },
+})
