@@ -1,0 +1,8 @@
+import { eq } from 'drizzle-orm'
+import type { Transaction } from '../client'
+import { users } from '../schema'
+
+export async function userByEmail(tx: Transaction, email: string) {
+  const [user] = await tx.select().from(users).where(eq(users.email, email))
+  return user
+}

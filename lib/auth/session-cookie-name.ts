@@ -1,0 +1,1 @@
+export const sessionCookieName = 'counterthrow_session'

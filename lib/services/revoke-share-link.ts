@@ -1,0 +1,38 @@
+import { and, eq, isNull, sql } from 'drizzle-orm'
+import { write } from '@/db/client'
+import { sceneById } from '@/db/queries/scenes'
+import { linkById } from '@/db/queries/share-links'
+import { shareLinks } from '@/db/schema'
+import type { Person } from '@/lib/auth/access'
+import { authorise } from '@/lib/auth/authorise'
+import type { ShareLink } from '@/lib/contracts/share-links'
+import { notFound } from '@/lib/errors/problem'
+import { audit } from './audit'
+import { shareLinkAnswer } from './share-link-answer'
+
+/** From now on it opens nothing, for good. Withdrawing it again changes nothing. */
+export async function revokeShareLink(person: Person | null, id: string): Promise<ShareLink> {
+  return write(async (tx) => {
+    const found = await linkById(tx, id)
+    const scene = found && (await sceneById(tx, found.link.sceneId))
+    authorise(person, 'link.revoke', scene, 'link')
+    const revoked = await tx
+      .update(shareLinks)
+      .set({ revokedAt: sql`now()` })
+      .where(and(eq(shareLinks.id, id), isNull(shareLinks.revokedAt)))
+      .returning({ revokedAt: shareLinks.revokedAt })
+    if (revoked.length > 0) {
+      await audit(tx, {
+        actorId: person.id,
+        workshopId: scene?.workshopId ?? null,
+        operation: 'link.revoke',
+        subject: `link:${id}`,
+        before: { revokedAt: null },
+        after: { revokedAt: revoked[0].revokedAt },
+      })
+    }
+    const row = await linkById(tx, id)
+    if (!row) throw notFound('link')
+    return shareLinkAnswer(row, new Date())
+  })
+}
