@@ -2,18 +2,11 @@ import type { InkTheme, Visibility } from '@/scene/frame/types'
 import { frameBytes, readFrame, type FrameBuffer, type Painted } from './protocol'
 import { paint } from './raster/paint'
 import type { RigShape } from './raster/prepare'
-import {
-  createRaster,
-  setRig,
-  setSize,
-  setTheme,
-  setVisibility,
-  type Raster,
-  type RasterFrame,
-} from './raster/raster'
+import { createRaster, setRig, setSize, setTheme, setVisibility } from './raster/raster'
 import { addSample, allSamples, firstSamples, showSamples } from './raster/refine'
 import { createResolution } from './resolution'
 import type { Sheet } from './sheet'
+import type { Raster, RasterFrame } from './raster/types'
 
 /** Paints frames onto a sheet and refines the one that stands still, in a worker or on the page. */
 export interface Painter {

@@ -1,6 +1,6 @@
 import type { Frame, InkTheme, Visibility } from '@/scene/frame/types'
 import type { RigShape } from './raster/prepare'
-import type { RasterFrame } from './raster/raster'
+import type { RasterFrame } from './raster/types'
 
 /** Page → worker. Everything but frames is sent when it changes; a frame's buffer is lent and comes back. */
 export type Order =

@@ -1,5 +1,5 @@
-import type { Raster } from './raster'
-import { DEPTH_ORIGIN, DEPTH_SCALE, type View } from './view'
+import { DEPTH_ORIGIN, DEPTH_SCALE } from './view'
+import type { Raster, View } from './types'
 
 // Clip coordinates of up to four corners: x·w, y·w, w, distance from the near plane.
 const corner = new Float64Array(16)

@@ -1,4 +1,4 @@
-import type { Raster } from './raster'
+import type { Raster } from './types'
 
 /** Fill and ink of every pixel in the dirty box, looked up in the palette. */
 export function compose({ palette, pixels, ink, image, dirty, flat, width }: Raster) {

@@ -1,6 +1,6 @@
 import { hatchRow } from './hatch'
-import type { Raster } from './raster'
 import { JITTER_X, JITTER_Y } from './view'
+import type { Raster } from './types'
 
 /** Makes picture coordinates positive, so that cutting off the fraction rounds down. */
 const whole = 1 << 20

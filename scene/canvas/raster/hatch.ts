@@ -1,6 +1,6 @@
-import type { Raster } from './raster'
 import { farInk, hatchHalf, hatchPitch } from './style'
 import { FOCAL } from './view'
+import type { Raster } from './types'
 
 /**
  * Families by bank (LOOK.md 6): A single, B paired, C broken, D crossed, E dotted, F paired broken; further banks

@@ -1,5 +1,4 @@
 import { clipEdge } from './clip'
-import type { Raster } from './raster'
 import { clearRuns, inkRuns, joinRun } from './runs'
 import {
   depthTolerance,
@@ -15,6 +14,7 @@ import {
   thinnestOutline,
 } from './style'
 import { CROSSING, depthRange } from './view'
+import type { Raster } from './types'
 
 /**
  * Inks the edges of every part drawn: a crease where either face looks at us, a smooth edge where one does and the

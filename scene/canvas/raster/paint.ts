@@ -4,10 +4,10 @@ import { hangHatch } from './hatch'
 import { inkLines } from './lines'
 import { fillPalette } from './palette'
 import { projectParts } from './project'
-import type { Raster, RasterFrame } from './raster'
 import { inkSeams } from './seams'
 import { outlineHalf } from './style'
-import { fillView, JITTER_X, JITTER_Y, type View } from './view'
+import { fillView, JITTER_X, JITTER_Y } from './view'
+import type { Raster, RasterFrame, View } from './types'
 
 /** Draws one picture into `raster.image`; what changed of it is `raster.dirty`. */
 export function paint(raster: Raster, frame: RasterFrame) {

@@ -1,7 +1,7 @@
 import { LIT, type InkTheme } from '@/scene/frame/types'
 import type { FlatRig } from './prepare'
-import type { Raster, RasterFrame } from './raster'
 import { crownWash, litShade } from './style'
+import type { Palette, Raster, RasterFrame } from './types'
 
 const PAPER = 0
 const METAL = 1
@@ -12,16 +12,6 @@ const CROWNS = 5 // light and shade of each cylinder's crown
 
 /** Tints are told apart to this many steps: fewer tables to mix anew. */
 const tintSteps = 32
-
-/** 256 colours a fill: from the bare fill to full ink, so that composing is a table look-up. */
-export interface Palette {
-  theme: InkTheme
-  colours: Uint32Array
-  /** First colour of the fill of each surface and tone (surface · 2 + tone). */
-  fillOf: Uint16Array
-  /** Tint step that each cylinder's crown is mixed for. */
-  tints: Int32Array
-}
 
 export function createPalette(flat: FlatRig): Palette {
   const theme = { paper: 0, part: 0, metal: 0, ink: 0, line: 0, pencil: 0, pencilWash: 0, gas: 0, fire: 0 }

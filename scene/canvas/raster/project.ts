@@ -1,8 +1,8 @@
 import { HIDDEN } from '@/scene/frame/types'
 import { clipFace } from './clip'
-import type { Raster } from './raster'
 import { lightFrom, narrowWidth, thinnest } from './style'
 import { CROSSING, DEPTH_ORIGIN, DEPTH_SCALE, FOCAL } from './view'
+import type { Raster } from './types'
 
 /** Projects the vertices of every part drawn, and lists the faces that look at us with surface and tone. */
 export function projectParts(raster: Raster) {

@@ -1,45 +1,9 @@
 import { SHOWN, type InkTheme, type Visibility } from '@/scene/frame/types'
-import { createPalette, loadTheme, type Palette } from './palette'
-import { flattenRig, type FlatRig, type RigShape } from './prepare'
-import { createRuns, type Runs } from './runs'
-import { createView, type View } from './view'
-
-/** Everything one picture is drawn in. Allocated with the rig and the size, never with a frame. */
-export interface Raster {
-  flat: FlatRig
-  view: View
-  runs: Runs
-  palette: Palette
-  visibility: Visibility
-  width: number
-  height: number
-  /** Picture pixels a CSS pixel: line widths and hatch grow with it. */
-  scale: number
-  /** Depth, surface and tone a pixel, nearest greatest, 0 is paper; one row more above and below. */
-  pixels: Int32Array
-  /** The same for ghosts, made when the first ghost is drawn. */
-  ghostPixels: Int32Array
-  /** Coverage by ink, with the same extra rows. */
-  ink: Uint8Array
-  /** RGBA in memory order, `width` × `height`. */
-  image: Uint32Array<ArrayBuffer>
-  /** What the last picture drew: x0, y0, x1, y1 (ends left out). */
-  drawn: Int32Array
-  /** What must be put on the canvas: the last picture's box united with this one's. */
-  dirty: Int32Array
-  /** The next picture covers everything: new size or colours. */
-  whole: boolean
-  /** Still picture: sums of samples, made when the first is refined. */
-  sumRedBlue: Uint32Array
-  sumGreen: Uint32Array
-}
-
-export interface RasterFrame {
-  pose: Float64Array
-  viewProjection: Float64Array
-  eye: Float64Array
-  tint: Float32Array
-}
+import { createPalette, loadTheme } from './palette'
+import { flattenRig, type RigShape } from './prepare'
+import { createRuns } from './runs'
+import type { Raster } from './types'
+import { createView } from './view'
 
 export function createRaster(rig: RigShape, theme: InkTheme): Raster {
   const raster: Raster = {

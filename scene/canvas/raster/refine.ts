@@ -1,7 +1,7 @@
 import { fillFaces } from './faces'
 import { clear } from './paint'
-import type { Raster } from './raster'
 import { JITTER_X, JITTER_Y } from './view'
+import type { Raster } from './types'
 
 /** Still pictures are shown after this many samples, then after all of them. */
 export const firstSamples = 4

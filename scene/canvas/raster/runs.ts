@@ -1,24 +1,5 @@
 import type { FlatRig } from './prepare'
-import type { Raster } from './raster'
-
-/** The visible pieces of edges of one picture, before they are inked. */
-export interface Runs {
-  count: number
-  /** 4 a run: both ends, in picture pixels. */
-  ends: Float64Array
-  /** Share of the run that has another body beyond it. */
-  outline: Float64Array
-  half: Float64Array
-  /** Most coverage the run may reach, 0 … 255. */
-  strength: Uint8Array
-  length: Float64Array
-  /** The common length below which the run is a fleck. */
-  least: Float64Array
-  /** The first run that ends on each projected vertex, −1 for none. */
-  atVertex: Int32Array
-  /** Runs that hang together form a tree; the root holds their common length. */
-  parent: Int32Array
-}
+import type { Raster, Runs } from './types'
 
 export function createRuns(flat: FlatRig): Runs {
   const most = 2 * flat.edgeCount + 64

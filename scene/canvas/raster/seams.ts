@@ -1,6 +1,6 @@
-import type { Raster } from './raster'
 import { farInk, farInsideHalf, insideHalf } from './style'
 import { LEAN } from './view'
+import type { Raster } from './types'
 
 /** Ink this strong nearby means that an edge is drawn there already. */
 const inked = 24

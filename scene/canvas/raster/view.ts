@@ -1,7 +1,7 @@
 import { GHOST, HIDDEN } from '@/scene/frame/types'
 import type { FlatRig } from './prepare'
-import type { Raster, RasterFrame } from './raster'
 import { light } from './style'
+import type { Raster, RasterFrame, View } from './types'
 
 /** Depth takes the upper bits of a positive 32-bit number. */
 export const depthRange = 2 ** 31
@@ -11,55 +11,6 @@ export const AWAY = 0 // hidden or off the picture
 export const WHOLE = 1
 export const CROSSING = 2 // cut by the near plane: goes the slow way
 
-/** How the parts stand before the eye in this frame. */
-export interface View {
-  /** 16 a part: rows that give picture x·w, picture y·w, w, and the distance from the near plane, of part coordinates. */
-  matrix: Float64Array
-  state: Uint8Array
-  /** 4 a part: box on the picture. */
-  box: Float64Array
-  /** 2 a part: least and greatest 1/w of its box before the near plane. */
-  inverses: Float64Array
-  /** w of the middle of each part's box. */
-  middle: Float64Array
-  /** 6 a part: eye and light in part coordinates. */
-  local: Float64Array
-  /** 0 near … 1 far, a part: how far behind the nearest bank its bank stands. */
-  far: Float64Array
-  /** How the hatch of each part hangs (./hatch). */
-  hang: Float64Array
-  /** Parts that are drawn, nearest first; ghosts apart. */
-  solids: Int32Array
-  solidCount: number
-  ghosts: Int32Array
-  ghostCount: number
-
-  /**
-   * Projected vertices; the depth is scaled 1/w. After those of the rig two spare ones for a clipped edge, then
-   * as many as there are faces for clipped faces, the next free one being `spare`.
-   */
-  x: Float64Array
-  y: Float64Array
-  z: Float64Array
-  spare: number
-  facing: Uint8Array
-  /** How much thinner lines are along a surface that is narrow on screen. */
-  thin: Float64Array
-  /** Of each surface's faces that look at us: true area and area on the picture. */
-  trueArea: Float64Array
-  seenArea: Float64Array
-
-  /** Faces to fill: 3 vertices each, with surface and tone. Solids nearest first, then ghosts. */
-  corners: Int32Array
-  codes: Int32Array
-  solidFaces: number
-  faces: number
-
-  lens: Lens
-}
-
-/** Doubles that change each frame, kept in one array so that none is boxed. */
-export type Lens = Float64Array
 export const FOCAL = 0 // pixels a metre at w = 1
 export const DEPTH_ORIGIN = 1 // depth = (1/w − origin) · scale
 export const DEPTH_SCALE = 2

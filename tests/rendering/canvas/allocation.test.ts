@@ -8,7 +8,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 
 const root = fileURLToPath(new URL('../../../', import.meta.url))
 
-describe('paint(raster, frame): memory, over 500 frames of a running V8', () => {
+describe('paint(raster, frame): memory, over 1,000 frames of a running V8', () => {
   const folder = mkdtempSync(join(tmpdir(), 'allocation-'))
   let figures: { madeAFrame: number; kept: number; keptInBuffers: number; sameBuffers: boolean }
 

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest'
-import type { Raster } from '@/scene/canvas/raster/raster'
 import { boxMesh, frameOf, poseOf, rigOf } from '@/tests/support/drawing/small-rig'
 import { drawn, inkAt, inkIn } from '@/tests/support/drawing/picture'
+import type { Raster } from '@/scene/canvas/raster/types'
 
 /** A cut face 200 pixels and more wide, straight before the eye. */
 const cutFace = (bank: number, motion: { x?: number; y?: number; turn?: number } = {}, scale = 1) => {

@@ -102,9 +102,13 @@ describe('fillInstant(out, plan, angle)', () => {
       for (let k = 0; k < times; k++) fillInstant(instant, plan, 0.01 * k)
     }
     run(20_000)
-    const before = process.memoryUsage().heapUsed
-    run(5000)
-    // the engine may box a number handed from function to function; the least array a cylinder would be 700 bytes a call
-    expect((process.memoryUsage().heapUsed - before) / 5000).toBeLessThan(300)
+    const made = Array.from({ length: 8 }, () => {
+      const before = process.memoryUsage().heapUsed
+      run(1000)
+      return (process.memoryUsage().heapUsed - before) / 1000
+    }).sort((a, b) => a - b)
+    // the compiler works beside it and makes things of its own, so the middle counts; the engine may box a number handed
+    // from function to function; the least array a cylinder would be 700 bytes a call
+    expect(made[4]).toBeLessThan(300)
   })
 })
