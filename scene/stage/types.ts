@@ -1,4 +1,5 @@
 import type { Instant, Plan } from '@/lib/mechanics/instant'
+import { namedViews, type NamedView } from '@/scene/frame/camera'
 import type { Camera, PartGroup, Rig } from '@/scene/frame/types'
 import type { Overlays } from '@/scene/model/scene'
 import type { Clock } from '@/scene/session/clock'
@@ -10,15 +11,17 @@ export interface StageModel {
   plan: Plan
   /** Firing events over one cycle, rad, in order. */
   events: { cylinder: number; angle: number }[]
-  /** Largest force and couple over the cycle, N and N m: they set the page's one scale of force. */
+  /** Largest force over the cycle, N: it sets the page's one scale of force. */
   peakForce: number
-  peakCouple: number
+  /** Couple drawn as a full arc, N m: the cycle's largest, but never one that is next to nothing for such a crank. */
+  fullCouple: number
+  /** Highest pressure over any piston in the cycle, Pa: a crown is tinted by its share of it. */
+  peakPressure: number
   /** Shaking force over one cycle, vertical and horizontal in turn, N: the orbit. */
   orbit: Float64Array
 }
 
-export const namedViews = ['free', 'end', 'drive', 'side', 'bank', 'top'] as const
-export type NamedView = (typeof namedViews)[number]
+export { namedViews, type NamedView }
 
 export interface Balloon {
   /** The number in the parts list. */
@@ -81,4 +84,9 @@ export interface Stage {
  * Mounts a stage in `host` (position: relative) and draws on demand: after a setter, a gesture, or the clock.
  * Implemented in ./create-stage.
  */
-export type CreateStage = (host: HTMLElement, clock: Clock, events: StageEvents, options: StageOptions) => Stage
+export type CreateStage = (
+  host: HTMLElement,
+  clock: Clock,
+  events: StageEvents,
+  options: StageOptions,
+) => Stage

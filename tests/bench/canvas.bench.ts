@@ -1,9 +1,10 @@
 import { bench, describe } from 'vitest'
 import { paint } from '@/scene/canvas/raster/paint'
-import { createRaster, setSize, type Raster, type RasterFrame } from '@/scene/canvas/raster/raster'
+import { createRaster, setSize } from '@/scene/canvas/raster/raster'
 import { addSample, allSamples, showSamples } from '@/scene/canvas/raster/refine'
 import { presetRig, shotOf } from '@/tests/support/drawing/engines'
 import { vellum } from '@/tests/support/drawing/small-rig'
+import type { Raster, RasterFrame } from '@/scene/canvas/raster/types'
 
 // Wanted on two cores without a GPU: 12 ms for a third of 1280 × 720, 20 ms zoomed twice.
 

@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { buildInstant, fillInstant } from '@/lib/mechanics/plan'
 import { crankTrainSchema } from '@/scene/model/crank-train'
+import { presetById } from '@/scene/model/presets'
 import flatPlane from '@/scene/model/presets/v8f-4200.json'
 import { toTrain } from '@/scene/model/to-train'
 import { buildStageModel } from '@/scene/stage/build-stage-model'
@@ -36,5 +37,21 @@ describe('buildStageModel(document, train, speed)', () => {
     expect(buildStageModel(document, train, 2 * speed).rig).toBe(model.rig)
     const other = { ...document, title: 'Other' }
     expect(buildStageModel(other, toTrain(other), speed).rig).not.toBe(model.rig)
+  })
+
+  it('a couple that is next to nothing is next to no arc, and one that rocks the engine a full one', () => {
+    const largestShare = (id: string) => {
+      const { train: document } = presetById(id)!
+      const model = buildStageModel(document, toTrain(document), speed)
+      const instant = buildInstant(model.plan)
+      let most = 0
+      for (let degree = 0; degree < 720; degree++) {
+        fillInstant(instant, model.plan, (degree * Math.PI) / 180)
+        most = Math.max(most, Math.hypot(instant.coupleVertical, instant.coupleHorizontal))
+      }
+      return most / model.fullCouple
+    }
+    expect(largestShare('v8x-5000')).toBeLessThan(0.02)
+    expect(largestShare('i3-1000')).toBeCloseTo(1, 6)
   })
 })

@@ -1,0 +1,229 @@
+'use client'
+
+import { useEffect, useEffectEvent, useMemo, useState, type ReactNode } from 'react'
+import { useStore } from 'zustand'
+import { Slips, useSlip } from '@/components/ui/slips'
+import { call } from '@/lib/contracts/call'
+import type { keepDraft as keepDraftOperation, keepSceneDraft } from '@/lib/contracts/drafts'
+import { newScene } from '@/scene/model/default-scene'
+import type { Scene } from '@/scene/model/scene'
+import { keepDraft } from '@/scene/session/draft'
+import { BenchContext, ResultsContext, useBench, useSessionState } from '@/scene/session/react'
+import { createResults } from '@/scene/session/results'
+import { sameTrain } from '@/scene/session/same-train'
+import type { Saved } from '@/scene/session/session'
+import { begin, setClock, type BenchStart } from './begin'
+import { Drive } from './drive'
+import { FiringStrip } from './firing-strip'
+import { PartsList } from './parts-list'
+import type { BenchPerson } from './person'
+import { PresetsDialog } from './presets-dialog'
+import { ConflictDialog, SaveDialog, SignInDialog } from './save-dialog'
+import { SetOutDialog } from './set-out-dialog'
+import { ShareDialog } from './share-dialog'
+import { StagePanel } from './stage-panel'
+import { BenchTitle } from './title'
+import { useFiles } from './use-files'
+import { useSaving } from './use-saving'
+
+export interface BenchProps extends BenchStart {
+  person: BenchPerson | null
+  /** The margin notes, a feature of their own. */
+  notes: ReactNode
+}
+
+/** The page where a crank train is described and run. */
+export function Bench({ person, notes, ...start }: BenchProps) {
+  const [tools] = useState(() => begin(start))
+  const [compute] = useState(createResults)
+  const scene = useStore(tools.session, (state) => state.scene)
+  const base = useStore(tools.session, (state) => state.base)
+  const results = useMemo(() => compute(scene), [compute, scene])
+
+  useEffect(() => setClock(tools), [tools, base])
+  useEffect(() => tools.clock.setCycle(results.train.cycle), [tools, results.train.cycle])
+  return (
+    <BenchContext value={tools}>
+      <ResultsContext value={results}>
+        <Slips>
+          <Sections person={person} notes={notes} />
+        </Slips>
+      </ResultsContext>
+    </BenchContext>
+  )
+}
+
+type Open = 'presets' | 'set-out' | 'save' | 'share' | 'sign-in-save' | 'sign-in-share' | null
+
+function Sections({ person, notes }: Pick<BenchProps, 'person' | 'notes'>) {
+  const { session } = useBench()
+  const slip = useSlip()
+  const [open, setOpen] = useState<Open>(null)
+  const [drawn, setDrawn] = useState({ words: 'setting out', reason: '' })
+  const saved = useSessionState((state) => state.saved)
+  const title = useSessionState((state) => state.scene.train.title)
+  const changed = useSessionState(
+    ({ saved: of, scene }) => of !== null && !sameTrain(of.scene.train, scene.train),
+  )
+  const saving = useSaving(person)
+  const files = useFiles()
+  const keptAt = useDraft(person)
+  const close = () => setOpen(null)
+  useUndoKeys()
+  const sceneId = saved?.sceneId
+  // The address says which scene this is, so that a reload and a bookmark find it again.
+  useEffect(() => {
+    window.history.replaceState(null, '', sceneId ? `/bench?scene=${sceneId}` : '/bench')
+  }, [sceneId])
+
+  const onSave = () => setOpen(person ? 'save' : 'sign-in-save')
+  const onShare = () => {
+    if (!person) setOpen('sign-in-share')
+    else if (saved) setOpen('share')
+    else {
+      slip({ text: 'A link opens a saved version: save this one first.', mark: 'less' })
+      setOpen('save')
+    }
+  }
+  const save = async (message: string, onTopOf?: number) => {
+    if (!(await saving.save(message, onTopOf))) return
+    close()
+    slip({ text: `Version ${session.getState().saved!.version} saved.` })
+  }
+  return (
+    <>
+      {notes}
+      <StagePanel
+        onRenderer={(kind, reason) =>
+          setDrawn({ words: kind === 'webgl' ? 'with 3D' : 'without 3D', reason })
+        }
+      />
+      <PartsList
+        onPresets={() => setOpen('presets')}
+        onSetOut={() => setOpen('set-out')}
+        onDownload={files.download}
+        onFile={files.bringIn}
+      />
+      <section className="fstrip" aria-label="Firing strip">
+        <Drive />
+        <FiringStrip />
+      </section>
+      <BenchTitle
+        person={person}
+        drawn={drawn}
+        keptAt={keptAt}
+        busy={saving.busy}
+        onSave={onSave}
+        onShare={onShare}
+      />
+      {open === 'presets' ? (
+        <PresetsDialog
+          onClose={close}
+          onChoose={(preset) => {
+            session.open(newScene(preset.train), 'preset')
+            close()
+          }}
+        />
+      ) : null}
+      {open === 'set-out' ? (
+        <SetOutDialog
+          onClose={close}
+          onDone={(document) => {
+            session.open(newScene(document), 'set out')
+            close()
+          }}
+        />
+      ) : null}
+      {open === 'sign-in-save' ? <SignInDialog to="save" onClose={close} /> : null}
+      {open === 'sign-in-share' ? <SignInDialog to="share" onClose={close} /> : null}
+      {open === 'save' && !saving.conflict ? (
+        <SaveDialog
+          version={saved ? saved.version + 1 : 1}
+          title={title}
+          busy={saving.busy}
+          problem={saving.problem}
+          onClose={() => {
+            saving.forget()
+            close()
+          }}
+          onSave={save}
+        />
+      ) : null}
+      {saving.conflict ? (
+        <ConflictDialog
+          conflict={saving.conflict}
+          busy={saving.busy}
+          onMine={() => save(saving.conflict!.yours.message, saving.conflict!.head.number)}
+          onTheirs={() => {
+            saving.takeTheirs()
+            close()
+          }}
+          onClose={() => {
+            saving.forget()
+            close()
+          }}
+        />
+      ) : null}
+      {open === 'share' && saved ? (
+        <ShareDialog saved={saved} changed={changed} title={title} onClose={close} />
+      ) : null}
+      {files.dialog}
+    </>
+  )
+}
+
+const clockTime = (at: number) =>
+  new Date(at).toLocaleTimeString('en-GB', { hour: '2-digit', minute: '2-digit' })
+
+/** Keeps the draft here, and on the server for whoever is signed in. Answers when it was last kept. */
+function useDraft(person: BenchPerson | null): string | null {
+  const { session, clock } = useBench()
+  const [keptAt, setKeptAt] = useState<string | null>(null)
+  const signedIn = person !== null
+  useEffect(
+    () =>
+      keepDraft({
+        store: localStorage,
+        session,
+        clock,
+        onKept: (at) => setKeptAt(clockTime(at)),
+        remote: signedIn ? keepOnServer : undefined,
+      }),
+    [session, clock, signedIn],
+  )
+  return keptAt
+}
+
+async function keepOnServer(document: Scene, saved: Saved | null): Promise<void> {
+  if (saved)
+    await call<typeof keepSceneDraft>({
+      method: 'PUT',
+      path: '/api/v1/scenes/{id}/draft',
+      params: { id: saved.sceneId },
+      body: { base: saved.version, document },
+    })
+  else
+    await call<typeof keepDraftOperation>({
+      method: 'PUT',
+      path: '/api/v1/draft',
+      body: { base: null, document },
+    })
+}
+
+/** Undo and redo by keys, where no field is being typed in. */
+function useUndoKeys(): void {
+  const { session } = useBench()
+  const onKey = useEffectEvent((event: KeyboardEvent) => {
+    const typing = event.target instanceof HTMLElement && event.target.matches('input, textarea, select')
+    if (typing || !(event.ctrlKey || event.metaKey) || event.altKey) return
+    const letter = event.key.toLowerCase()
+    if (letter === 'z' && !event.shiftKey) session.undo()
+    else if (letter === 'y' || (letter === 'z' && event.shiftKey)) session.redo()
+    else return
+    event.preventDefault()
+  })
+  useEffect(() => {
+    window.addEventListener('keydown', onKey)
+    return () => window.removeEventListener('keydown', onKey)
+  }, [])
+}

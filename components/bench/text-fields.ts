@@ -1,0 +1,79 @@
+import { formatNumber } from '@/lib/units/format'
+import { parseQuantity } from '@/lib/units/parse'
+import type { Scene } from '@/scene/model/scene'
+import type { Field, Reading } from '@/scene/session/field'
+
+/** A field of several values in one line: `0/90/270/180`, `1-8-4-3-6-5-7-2`. */
+export interface TextField extends Field {
+  show(scene: Scene): string
+}
+
+const angle = (value: number) => {
+  const [, part = ''] = String(Number(Math.abs(value).toFixed(4))).split('.')
+  return formatNumber(value, { decimals: part.length })
+}
+
+/** Angles of a list, one entry an item, in the document's order. */
+function angleList(list: 'banks' | 'throws', label: string, word: string): TextField {
+  return {
+    key: list,
+    label,
+    show: ({ train }) => train[list].map((item) => angle(item.angleDeg)).join('/'),
+    read(text, { train }): Reading {
+      const parts = text.split('/')
+      if (parts.length !== train[list].length)
+        return {
+          ok: false,
+          message: `${count(parts.length, 'angle')} for ${count(train[list].length, word)}. Write one for each, with / between: ${train[list].map((item) => angle(item.angleDeg)).join('/')}.`,
+          mends: [],
+        }
+      const changes = []
+      for (const [i, part] of parts.entries()) {
+        const parsed = parseQuantity(part, 'angle', '°')
+        if (!parsed.ok) return { ok: false, message: parsed.message, mends: [] }
+        const value = parsed.unit === '°' ? parsed.number : (parsed.value * 180) / Math.PI
+        changes.push({ path: ['train', list, i, 'angleDeg'], value })
+      }
+      return { ok: true, changes }
+    },
+  }
+}
+
+const count = (n: number, word: string) => `${n} ${word}${n === 1 ? '' : 's'}`
+
+export const bankAngles = angleList('banks', 'Bank angles', 'bank')
+export const throwAngles = angleList('throws', 'Throws', 'throw')
+
+/** Names in a row: hyphens, commas or spaces between. */
+export const splitNames = (text: string) =>
+  text
+    .split(/[\s,;\u2013\u2212-]+/)
+    .map((name) => name.trim())
+    .filter(Boolean)
+
+export const firingOrder: TextField = {
+  key: 'firingOrder',
+  label: 'Firing order',
+  show: ({ train }) => train.firingOrder.join('-'),
+  read: (text, { train }) => {
+    // Names may themselves hold a hyphen: then the document's own spelling is looked for first.
+    const order = text.trim() === train.firingOrder.join('-') ? train.firingOrder : splitNames(text)
+    return { ok: true, changes: [{ path: ['train', 'firingOrder'], value: order }] }
+  },
+}
+
+export const mainPlaces: TextField = {
+  key: 'mains',
+  label: 'Mains at',
+  show: ({ train }) => train.mains.map((main) => angle(main.axialMm)).join('/'),
+  read(text) {
+    const mains = []
+    for (const [i, part] of text.split('/').entries()) {
+      if (part.trim() === '') continue
+      const parsed = parseQuantity(part, 'length', 'mm')
+      if (!parsed.ok) return { ok: false, message: parsed.message, mends: [] }
+      mains.push({ id: `M${i + 1}`, axialMm: Number((parsed.value * 1000).toPrecision(12)) })
+    }
+    return { ok: true, changes: [{ path: ['train', 'mains'], value: mains }] }
+  },
+}

@@ -1,0 +1,87 @@
+'use client'
+
+import { useEffect, useEffectEvent, useId, useRef } from 'react'
+import { createStage } from '@/scene/stage/create-stage'
+import type { Camera } from '@/scene/frame/types'
+import type { Clock } from '@/scene/session/clock'
+import type { NamedView, RendererKind, Stage, StageEvents, StageLook, StageModel } from '@/scene/stage/types'
+
+export interface StageViewProps extends StageEvents {
+  clock: Clock
+  model: StageModel
+  look: StageLook
+  camera?: Camera | null
+  renderer?: RendererKind | 'auto'
+  pane?: NamedView
+  /** Names the drawing for those who do not see it. */
+  label: string
+  description?: string
+  className?: string
+  /** Handed the stage once it stands, and null when it has gone. */
+  onStage?(stage: Stage | null): void
+}
+
+/** React's hand on a stage: mounts it once, passes changes on, and never re-renders for an angle. */
+export function StageView(props: StageViewProps) {
+  const { clock, model, look, camera, renderer = 'auto', pane, label, description, className } = props
+  const words = useId()
+  const host = useRef<HTMLDivElement>(null)
+  const stage = useRef<Stage | null>(null)
+  const onPick = useEffectEvent((part: string | null) => props.onPick?.(part))
+  const onHover = useEffectEvent((part: string | null) => props.onHover?.(part))
+  const onBalloon = useEffectEvent((number: number) => props.onBalloon?.(number))
+  const onCamera = useEffectEvent((next: Camera) => props.onCamera?.(next))
+  const onRenderer = useEffectEvent((kind: RendererKind, reason: string) => props.onRenderer?.(kind, reason))
+  const onTick = useEffectEvent<NonNullable<StageEvents['onTick']>>((instant) => props.onTick?.(instant))
+  const onStage = useEffectEvent((next: Stage | null) => props.onStage?.(next))
+  const first = useEffectEvent(() => ({ model, look, camera: camera ?? null, renderer }))
+
+  useEffect(() => {
+    if (!host.current) return
+    const start = first()
+    const still = window.matchMedia('(prefers-reduced-motion: reduce)').matches
+    const created = createStage(
+      host.current,
+      clock,
+      { onPick, onHover, onBalloon, onCamera, onRenderer, onTick },
+      { renderer: start.renderer, pane, motion: !still },
+    )
+    created.setModel(start.model)
+    created.setLook(start.look)
+    created.setCamera(start.camera)
+    stage.current = created
+    onStage(created)
+    return () => {
+      stage.current = null
+      onStage(null)
+      created.dispose()
+    }
+  }, [clock, pane])
+
+  useEffect(() => stage.current?.setModel(model), [model])
+  useEffect(() => stage.current?.setLook(look), [look])
+  useEffect(() => {
+    if (camera !== undefined) stage.current?.setCamera(camera)
+  }, [camera])
+  useEffect(() => stage.current?.setRenderer(renderer), [renderer])
+
+  return (
+    <>
+      <div
+        ref={host}
+        className={className}
+        style={{ position: 'relative', width: '100%', height: '100%' }}
+        role="application"
+        aria-roledescription="moving drawing"
+        aria-label={label}
+        aria-describedby={description ? words : undefined}
+        tabIndex={pane ? -1 : 0}
+      />
+      {description ? (
+        <p className="vh" id={words}>
+          {description}
+        </p>
+      ) : null}
+    </>
+  )
+}

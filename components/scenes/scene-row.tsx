@@ -1,0 +1,63 @@
+import Link from 'next/link'
+import type { SceneSummary } from '@/lib/contracts/scenes'
+import { Thumbnail } from './thumbnail'
+
+export type SceneAct = 'rename' | 'duplicate' | 'archive' | 'restore'
+
+interface Props {
+  scene: SceneSummary
+  number: number
+  acts: SceneAct[]
+  onAct(act: SceneAct, scene: SceneSummary): void
+}
+
+const words: Record<SceneAct, string> = {
+  rename: 'Rename…',
+  duplicate: 'Duplicate',
+  archive: 'Archive',
+  restore: 'Restore',
+}
+
+const day = new Intl.DateTimeFormat('en-GB', { day: 'numeric', month: 'short', year: 'numeric' })
+const litres = (cc: number) =>
+  (cc / 1000).toLocaleString('en-US', { minimumFractionDigits: 3, maximumFractionDigits: 3 })
+
+/** One line of the drawing register. */
+export function SceneRow({ scene, number, acts, onAct }: Props) {
+  const { cylinderCount: cylinders } = scene
+  return (
+    <tr>
+      <td className="fig no2">{String(number).padStart(2, '0')}</td>
+      <td className="th">
+        <Thumbnail src={scene.thumbnailUrl} />
+      </td>
+      <th scope="row">
+        <Link href={`/bench?scene=${scene.id}`}>{scene.title}</Link>
+        <span className="cap">
+          {cylinders} {cylinders === 1 ? 'cylinder' : 'cylinders'}
+          {scene.message ? `, ${scene.message}` : ''}
+        </span>
+      </th>
+      <td className="n disp">
+        {litres(scene.displacementCc)}
+        <span className="u"> L</span>
+      </td>
+      <td className="n ver">
+        <span className="vh">version </span>
+        {scene.headVersion}
+      </td>
+      <td className="who2">
+        {scene.savedBy}
+        <span className="cap">{day.format(new Date(scene.savedAt))}</span>
+      </td>
+      <td className="row-acts">
+        {acts.map((act) => (
+          <button key={act} type="button" className="btn txt sm" onClick={() => onAct(act, scene)}>
+            {words[act]}
+            <span className="vh"> {scene.title}</span>
+          </button>
+        ))}
+      </td>
+    </tr>
+  )
+}

@@ -1,0 +1,33 @@
+'use client'
+
+import useSWRInfinite from 'swr/infinite'
+import { addressOf, readAddress } from '@/lib/contracts/call'
+import type { listScenes } from '@/lib/contracts/scenes'
+import type { AnswerOf } from '@/lib/contracts/operation'
+
+export type SceneState = 'current' | 'archived'
+type Page = AnswerOf<typeof listScenes>
+
+/** The register, a page at a time as the database cuts it. */
+export function useScenes(workshop: string, state: SceneState, search: string) {
+  const { data, error, isLoading, isValidating, size, setSize, mutate } = useSWRInfinite<Page, Error>(
+    (index: number, before: Page | null) =>
+      before && !before.next
+        ? null
+        : addressOf(
+            '/api/v1/scenes',
+            {},
+            { workshop, state, search, after: index ? before?.next : undefined },
+          ),
+    readAddress,
+    { keepPreviousData: true, revalidateFirstPage: false },
+  )
+  return {
+    scenes: data?.flatMap((page) => page.scenes) ?? [],
+    loading: isLoading,
+    busy: isValidating,
+    error,
+    more: data && data[data.length - 1]?.next ? () => setSize(size + 1) : null,
+    refresh: () => mutate(),
+  }
+}

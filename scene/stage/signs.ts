@@ -1,0 +1,34 @@
+import type { RendererKind } from './types'
+
+/** What the host says of its drawing to tests and to whoever assists: attributes, written now and then. */
+export interface Signs {
+  renderer(kind: RendererKind): void
+  drawn(now: number, angle: number, still: boolean): void
+  clear(): void
+}
+
+/** Between two writes while the engine moves, ms. */
+const seldom = 500
+
+export function createSigns(host: HTMLElement): Signs {
+  let frames = 0
+  let written = -Infinity
+  let stillShown = false
+  return {
+    renderer(kind) {
+      host.dataset.renderer = kind
+    },
+    drawn(now, angle, still) {
+      frames++
+      if (stillShown !== still) host.dataset.still = String(still)
+      stillShown = still
+      if (!still && now - written < seldom) return
+      written = now
+      host.dataset.frames = String(frames)
+      host.dataset.angle = ((angle * 180) / Math.PI).toFixed(2)
+    },
+    clear() {
+      for (const name of ['renderer', 'frames', 'angle', 'still']) delete host.dataset[name]
+    },
+  }
+}
