@@ -1,6 +1,6 @@
 'use client'
 
-import { useId, useState, type FormEvent, type ReactNode } from 'react'
+import { useId, useState, useSyncExternalStore, type FormEvent, type ReactNode } from 'react'
 import { Refusal } from '@/lib/contracts/call'
 
 export interface AccountField {
@@ -29,6 +29,12 @@ export function AccountForm({ title, fields, submit, ways, aside, send }: Props)
   const id = useId()
   const [refusal, setRefusal] = useState<Refusal | null>(null)
   const [sending, setSending] = useState(false)
+  // before the script stands the browser itself would send the form, to nowhere
+  const ready = useSyncExternalStore(
+    () => () => {},
+    () => true,
+    () => false,
+  )
   const issueOf = (name: string) => refusal?.problem.issues?.find((issue) => issue.path === name)
   const general = refusal && !fields.some((field) => issueOf(field.name))
 
@@ -72,7 +78,7 @@ export function AccountForm({ title, fields, submit, ways, aside, send }: Props)
       {ways}
       <div className="c6 acts first">
         <span className="cap grow">{aside}</span>
-        <button className="btn pri" type="submit" disabled={sending}>
+        <button className="btn pri" type="submit" disabled={sending || !ready}>
           {submit}
         </button>
       </div>

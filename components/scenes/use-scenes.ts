@@ -20,7 +20,7 @@ export function useScenes(workshop: string, state: SceneState, search: string) {
             { workshop, state, search, after: index ? before?.next : undefined },
           ),
     readAddress,
-    { keepPreviousData: true, revalidateFirstPage: false },
+    { keepPreviousData: true },
   )
   return {
     scenes: data?.flatMap((page) => page.scenes) ?? [],

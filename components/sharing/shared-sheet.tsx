@@ -74,9 +74,7 @@ export function SharedSheet({ shared, poster, summary }: Props) {
           </span>
         </TitleCell>
         <TitleCell k="Open until" span={3}>
-          <span className="v">
-            {shared.endsAt ? day.format(new Date(shared.endsAt)) : 'withdrawn by its sender'}
-          </span>
+          <span className="v">{shared.endsAt ? day.format(new Date(shared.endsAt)) : 'it is withdrawn'}</span>
         </TitleCell>
         <TitleActions note="Opening this page is counted: how often and when last.">
           <PrintButton />

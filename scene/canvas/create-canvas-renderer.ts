@@ -1,9 +1,7 @@
 import type { InkTheme, Renderer, Rig, Visibility } from '@/scene/frame/types'
-import { pagePacing } from './pacing'
-import { createPainter, type Painter } from './painter'
+import type { Painter } from './painter'
 import { frameBytes, readFrame, writeFrame, type Answer, type Order, type Painted } from './protocol'
 import type { RigShape } from './raster/prepare'
-import { createSheet } from './sheet'
 
 /**
  * Draws rig and frames in ink without a GPU: in a worker on an OffscreenCanvas, or on the page where either is
@@ -36,12 +34,13 @@ export function createCanvasRenderer(
 
   const order = (message: Order, lent: Transferable[] = []) => worker?.postMessage(message, lent)
 
-  const onPage = () => {
+  const onPage = async () => {
     worker?.terminate()
     worker = null
+    const { createPagePainter } = await import('./on-page')
+    if (gone) return
     settled = true
-    const sheet = createSheet(canvas)
-    if (sheet && !gone) painter = createPainter(sheet, pagePacing)
+    painter = createPagePainter(canvas)
     handOver()
   }
 
@@ -114,7 +113,7 @@ export function createCanvasRenderer(
     typeof OffscreenCanvas === 'undefined' ||
     !canvas.transferControlToOffscreen
   ) {
-    onPage()
+    void onPage()
     return renderer
   }
   worker = new Worker(new URL('./worker.ts', import.meta.url), { type: 'module' })
@@ -122,7 +121,7 @@ export function createCanvasRenderer(
     if (gone) return
     if (data.kind === 'able') {
       if (data.able) inWorker()
-      else onPage()
+      else void onPage()
       return
     }
     busy = false
@@ -132,7 +131,7 @@ export function createCanvasRenderer(
   worker.onerror = () => {
     if (gone) return
     if (settled) busy = false
-    else onPage()
+    else void onPage()
   }
   return renderer
 }

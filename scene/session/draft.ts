@@ -1,5 +1,6 @@
 import type { Scene } from '@/scene/model/scene'
 import { readOnce } from './judge'
+import { sameTrain } from './same-train'
 import type { Base, Saved, Session } from './session'
 import type { Clock } from './clock'
 
@@ -80,8 +81,10 @@ export function keepDraft({ store, session, clock, onKept, remote }: Keeping): (
       there = setTimeout(keepThere, THERE_MS)
     }
   })
+  /** Whoever leaves finds the bench as it stood, also where nothing was typed; a version that is only looked at needs no draft. */
   const flush = () => {
-    if (here === undefined) return
+    const { scene, saved } = session.getState()
+    if (here === undefined && saved && sameTrain(saved.scene.train, scene.train)) return
     clearTimeout(here)
     keepHere()
   }

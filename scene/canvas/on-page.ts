@@ -1,0 +1,9 @@
+import { pagePacing } from './pacing'
+import { createPainter, type Painter } from './painter'
+import { createSheet } from './sheet'
+
+/** The whole renderer on the page itself, fetched only where no worker can draw. */
+export function createPagePainter(canvas: HTMLCanvasElement): Painter | null {
+  const sheet = createSheet(canvas)
+  return sheet && createPainter(sheet, pagePacing)
+}
