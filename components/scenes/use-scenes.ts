@@ -20,7 +20,8 @@ export function useScenes(workshop: string, state: SceneState, search: string) {
             { workshop, state, search, after: index ? before?.next : undefined },
           ),
     readAddress,
-    { keepPreviousData: true },
+    // what was archived a moment ago is already in the other list: each is read anew when it is shown
+    { keepPreviousData: true, dedupingInterval: 0 },
   )
   return {
     scenes: data?.flatMap((page) => page.scenes) ?? [],
