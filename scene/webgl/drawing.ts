@@ -1,6 +1,6 @@
 import { Color, Matrix4, Vector2, Vector3, type IUniform, type Texture } from 'three'
 import type { Frame, InkTheme, Rig } from '@/scene/frame/types'
-import { light } from './manner'
+import { light } from '@/scene/frame/manner'
 
 /** The uniforms that all passes share: written in place before each frame, never replaced. */
 export interface Drawing {

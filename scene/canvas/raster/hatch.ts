@@ -1,4 +1,4 @@
-import { farInk, hatchHalf, hatchPitch } from './style'
+import { farInk, hatchHalf, hatchPitch } from '@/scene/frame/manner'
 import { FOCAL } from './view'
 import type { Raster } from './types'
 

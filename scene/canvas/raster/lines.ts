@@ -12,7 +12,7 @@ import {
   insideHalf,
   outlineHalf,
   thinnestOutline,
-} from './style'
+} from '@/scene/frame/manner'
 import { CROSSING, depthRange } from './view'
 import type { Raster } from './types'
 

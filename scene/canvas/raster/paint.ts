@@ -5,7 +5,7 @@ import { inkLines } from './lines'
 import { fillPalette } from './palette'
 import { projectParts } from './project'
 import { inkSeams } from './seams'
-import { outlineHalf } from './style'
+import { outlineHalf } from '@/scene/frame/manner'
 import { fillView, JITTER_X, JITTER_Y } from './view'
 import type { Raster, RasterFrame, View } from './types'
 

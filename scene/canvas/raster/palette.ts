@@ -1,6 +1,6 @@
 import { LIT, type InkTheme } from '@/scene/frame/types'
 import type { FlatRig } from './prepare'
-import { crownWash, litShade } from './style'
+import { crownWash, litShade } from '@/scene/frame/manner'
 import type { Palette, Raster, RasterFrame } from './types'
 
 const PAPER = 0

@@ -1,6 +1,6 @@
 import { HIDDEN } from '@/scene/frame/types'
 import { clipFace } from './clip'
-import { lightFrom, narrowWidth, thinnest } from './style'
+import { lightFrom, narrowWidth, thinnest } from '@/scene/frame/manner'
 import { CROSSING, DEPTH_ORIGIN, DEPTH_SCALE, FOCAL } from './view'
 import type { Raster } from './types'
 

@@ -1,4 +1,4 @@
-import { farInk, farInsideHalf, insideHalf } from './style'
+import { farInk, farInsideHalf, insideHalf } from '@/scene/frame/manner'
 import { LEAN } from './view'
 import type { Raster } from './types'
 

@@ -1,6 +1,6 @@
 import { GHOST, HIDDEN } from '@/scene/frame/types'
 import type { FlatRig } from './prepare'
-import { light } from './style'
+import { light } from '@/scene/frame/manner'
 import type { Raster, RasterFrame, View } from './types'
 
 /** Depth takes the upper bits of a positive 32-bit number. */

@@ -1,4 +1,4 @@
-import { crownWash, lightFrom, litShade } from '../manner'
+import { crownWash, lightFrom, litShade } from '@/scene/frame/manner'
 import { float, partTable, view } from './common'
 import { hangHatch, hatchInk } from './hatch'
 

@@ -1,4 +1,4 @@
-import { farInk, hatchHalf, hatchPitch } from '../manner'
+import { farInk, hatchHalf, hatchPitch } from '@/scene/frame/manner'
 import { float } from './common'
 
 /** Where the hatch of a part hangs on the sheet (pixels, y down) and along what it lies: it rides with the part. */

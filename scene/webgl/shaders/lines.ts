@@ -10,7 +10,7 @@ import {
   outlineHalf,
   thinnest,
   thinnestOutline,
-} from '../manner'
+} from '@/scene/frame/manner'
 import { float, partTable, view } from './common'
 
 /**

@@ -1,6 +1,6 @@
 /**
- * The manner of the drawing for the shaders, lengths in CSS pixels (INK.md, LOOK.md 3 and 8). The canvas renderer draws by
- * the same figures in a room that this one may not see; tests/unit/stage/manner.test.ts holds the two to each other.
+ * The manner of the drawing, in CSS pixels where it is a length. Every surface has the same
+ * two tones, light `metal` and shaded `part`; a crown's are both mixed towards `gas`, a lit part's are the pencil's wash.
  */
 
 /** A face is light where its normal and this direction (right, up, towards the eye; unit) agree by more than `lightFrom`. */
@@ -23,6 +23,11 @@ export const ghostInk = 0.62
 export const narrowWidth = 4
 export const thinnest = 0.25
 export const thinnestOutline = 0.75
+
+/** Runs of ink that stand alone and are shorter than this are flecks; along a narrow surface as much longer as its lines are thinner. */
+export const fleckLength = 4.5
+/** Gaps in a line up to this long are closed. */
+export const gapLength = 2
 
 /** Distance between hatch lines. */
 export const hatchPitch = 5.5
