@@ -111,7 +111,8 @@ export function analyse(train: Train, options: AnalysisOptions): Analysis {
   }
 }
 
-function stepsPerTurn(stepDeg: number): number {
+/** Steps of `stepDeg` in a turn; RangeError where it does not divide 360 or is finer than `LEAST_STEP_DEG`. */
+export function stepsPerTurn(stepDeg: number): number {
   const steps = Math.round(360 / stepDeg)
   const divides = steps >= 1 && Math.abs(steps * stepDeg - 360) < 1e-6
   if (!divides || stepDeg < LEAST_STEP_DEG)

@@ -38,6 +38,13 @@ export interface Phasor {
   angle: number
 }
 
+/** Mass × radius of each throw's bob-weight, without the oil. */
+export const hungUnbalances = (train: Train) =>
+  bobWeights(train).map(({ mass, oil }, index) => {
+    const { angle, axial, radius } = train.throws[index]
+    return { angle, axial, unbalance: (mass - oil) * radius }
+  })
+
 /** Below this share of the unbalances that cancel, what is left is rounding. */
 const ROUNDING = 1e-13
 
@@ -46,11 +53,7 @@ const ROUNDING = 1e-13
  * allowance is no part of it: it is on the bob-weight card only.
  */
 export function residualUnbalance(train: Train): { static: Phasor; couple: Phasor } {
-  const weights = bobWeights(train).map(({ mass, oil }, index) => {
-    const { angle, axial, radius } = train.throws[index]
-    return { angle, axial, unbalance: (mass - oil) * radius }
-  })
-  const all = [...crankUnbalances(train), ...weights]
+  const all = [...crankUnbalances(train), ...hungUnbalances(train)]
   return {
     static: sum(all.map(({ angle, unbalance }) => ({ angle, size: unbalance }))),
     couple: sum(

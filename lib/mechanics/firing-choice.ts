@@ -35,16 +35,14 @@ const TIE = 1e-6
 export function firingChoice({ tops, order, cycle, stated }: FiringQuestion): FiringChoice {
   const turns = Math.round(cycle / TURN)
   const count = order.length
-  const crowded = order.map(
-    (one) =>
-      order.filter((other) => Math.abs(wrapCentred(tops[one] - tops[other], TURN)) <= SAME).length > turns,
-  )
+  const crowded = (one: number) =>
+    order.filter((other) => Math.abs(wrapCentred(tops[one] - tops[other], TURN)) <= SAME).length > turns
   const together = (from: number, to: number) => {
     if (from === to) return false
     const [one, other] = [stated[order[from]], stated[order[to]]]
     if (one !== undefined && other !== undefined)
       return Math.abs(wrapCentred(one - other, cycle)) <= STATED_WITHIN
-    return crowded[from]
+    return crowded(order[from])
   }
   /** The least angle from place `from` of the order to the next firing at place `to`. */
   const leastStep = (from: number, to: number) => {

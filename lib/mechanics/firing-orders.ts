@@ -1,4 +1,4 @@
-import { wrap } from '@/lib/numerics/wrap'
+import { wrap, wrapCentred } from '@/lib/numerics/wrap'
 import { deadCentres } from './dead-centres'
 import { EVEN_WITHIN } from './firing'
 import { SAME } from './firing-choice'
@@ -9,7 +9,8 @@ const TURN = 2 * Math.PI
 
 /**
  * Every firing order that the crank allows, as cylinder indices: each cyclic order once, beginning with the first
- * cylinder, no two cylinders at once. With `even`, only those whose intervals are equal within half a degree.
+ * cylinder, no two cylinders at once unless one top dead centre has more of them than the cycle has turns; then they stand
+ * in the order of the train. With `even`, only those whose intervals are equal within half a degree.
  *
  * Each cylinder can fire at its top dead centre in either turn of a four-stroke cycle; the first cylinder's is fixed,
  * since firing everything a turn later is the same order. Even orders fill one slot of the cycle after the other, so
@@ -51,11 +52,14 @@ function* filled(slots: readonly number[][], order: number[]): Generator<number[
 
 function* allOrders(open: readonly number[][], cycle: number): Generator<number[]> {
   const seen = new Set<string>()
+  const crowded = open.map(
+    ([own]) => open.filter(([top]) => Math.abs(wrapCentred(top - own, TURN)) <= SAME).length > cycle / TURN,
+  )
   for (const angles of choices([[0], ...open.slice(1)])) {
     const order = angles.map((_, cylinder) => cylinder).sort((one, other) => angles[one] - angles[other])
     const apart = order.every((cylinder, place) => {
       const next = place + 1 < order.length ? angles[order[place + 1]] : cycle
-      return next - angles[cylinder] > SAME
+      return next - angles[cylinder] > SAME || crowded[cylinder]
     })
     const key = order.join()
     if (apart && !seen.has(key)) {

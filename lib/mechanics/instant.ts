@@ -38,6 +38,9 @@ export interface Instant {
   // engine
   gasTorque: number
   inertiaTorque: number
+  /** The same by the cylinder whose piston and rod make it. */
+  cylinderGasTorque: Float64Array
+  cylinderInertiaTorque: Float64Array
   shakingVertical: number
   shakingHorizontal: number
   coupleVertical: number

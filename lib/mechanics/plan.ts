@@ -60,6 +60,8 @@ export function buildInstant({ train }: Plan): Instant {
     mainHorizontal: main(),
     gasTorque: 0,
     inertiaTorque: 0,
+    cylinderGasTorque: each(),
+    cylinderInertiaTorque: each(),
     shakingVertical: 0,
     shakingHorizontal: 0,
     coupleVertical: 0,

@@ -67,13 +67,18 @@ export function fillRodLoads(out: Instant, plan: Plan, i: number): void {
     carried.moment[master] += motion.armU[i] * pinV - motion.armV[i] * pinU
   }
 
-  out.gasTorque -= out.gasForce[i] * motion.pin1[i]
-  out.inertiaTorque -=
-    (pistonMass * motion.pin2[i] * motion.pin1[i] +
+  const gasTorque = -out.gasForce[i] * motion.pin1[i]
+  const inertiaTorque =
+    -(
+      pistonMass * motion.pin2[i] * motion.pin1[i] +
       rod.mass * (centreU2 * centreU1 + centreV2 * centreV1) +
       rod.inertia * angle2 * angle1 +
-      bigEndBearing * (motion.bigEndU2[i] * motion.bigEndU1[i] + motion.bigEndV2[i] * motion.bigEndV1[i])) *
-    square
+      bigEndBearing * (motion.bigEndU2[i] * motion.bigEndU1[i] + motion.bigEndV2[i] * motion.bigEndV1[i])
+    ) * square
+  out.cylinderGasTorque[i] = gasTorque
+  out.cylinderInertiaTorque[i] = inertiaTorque
+  out.gasTorque += gasTorque
+  out.inertiaTorque += inertiaTorque
 
   const forceU = inertiaU - pistonMass * motion.pin2[i] * square
   const vertical = forceU * cosBank - inertiaV * sinBank

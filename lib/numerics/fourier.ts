@@ -34,3 +34,15 @@ export function fourierCoefficient(signal: ArrayLike<number>, bin: number, circl
   }
   return { re: re / n, im: im / n }
 }
+
+/** A·cos(x − phase), with its phase in rad. */
+export interface Harmonic {
+  amplitude: number
+  phase: number
+}
+
+/** The harmonic 2·Re(c·e^(ix)) that a coefficient other than the mean stands for. */
+export const harmonicOf = ({ re, im }: Complex): Harmonic => ({
+  amplitude: 2 * Math.hypot(re, im),
+  phase: re === 0 && im === 0 ? 0 : -Math.atan2(im, re),
+})

@@ -35,7 +35,7 @@ export function parseQuantity(text: string, quantity: Quantity, as: System | Uni
   const number = found.value(comma === 'ambiguous' ? found.digits.replace(/,/g, '') : comma)
   if (!Number.isFinite(number)) return notANumber(spec)
   const unit = suffix === '' ? bare : spec.accepts.find((name) => isWritten(name, suffix))
-  if (unit === undefined) return wrongUnit(suffix, quantity)
+  if (unit === undefined) return wrongUnit(number, suffix, quantity)
   return { ok: true, value: toSi(number, unit), number, unit }
 }
 
@@ -132,11 +132,22 @@ const notANumber = (spec: { example: string }): Parsed => ({
   mends: [],
 })
 
-function wrongUnit(suffix: string, quantity: Quantity): Parsed {
+function wrongUnit(number: number, suffix: string, quantity: Quantity): Parsed {
   const spec = quantities[quantity]
-  const refuse = (code: string, message: string): Parsed => ({ ok: false, code, message, mends: [] })
+  const refuse = (code: string, message: string, mends: Mend[] = []): Parsed => ({
+    ok: false,
+    code,
+    message,
+    mends,
+  })
   if (quantity === 'unbalance' && /^(ozf|lbf)/i.test(suffix))
-    return refuse('U02', `Unbalance is mass × distance (oz in), not torque (${suffix}).`)
+    return refuse(
+      'U02',
+      `Unbalance is mass × distance (oz in), not torque (${suffix}).`,
+      /^ozf/i.test(suffix) ? [{ label: `Use ${number} oz in`, text: `${number} oz in` }] : [],
+    )
+  if (quantity === 'torque' && /^(oz|lb) ?in$/i.test(suffix))
+    return refuse('U02', `A moment is force × distance (ozf in, lbf ft), not unbalance (${suffix}).`)
   const known = (Object.keys(units) as UnitName[]).find((name) => name !== '' && isWritten(name, suffix))
   const owner = known && Object.values(quantities).find(({ accepts }) => accepts.includes(known))
   return refuse(

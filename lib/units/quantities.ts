@@ -116,7 +116,7 @@ const specs = {
   torque: {
     name: 'a moment',
     example: '533 N m or 393 lbf ft',
-    accepts: ['N m', 'kN m', 'lbf ft'],
+    accepts: ['N m', 'kN m', 'lbf ft', 'ozf in'],
     si: [
       { unit: 'N m', digits: three },
       { unit: 'kN m', digits: three, from: 10000 },
@@ -132,6 +132,13 @@ const specs = {
       { unit: 'kJ', digits: three, from: 1e5 },
     ],
     us: [{ unit: 'ft lbf', digits: d(0) }],
+  },
+  power: {
+    name: 'a power',
+    example: '110 kW or 148 hp',
+    accepts: ['kW', 'hp'],
+    si: [{ unit: 'kW', digits: d(1) }],
+    us: [{ unit: 'hp', digits: d(1) }],
   },
   velocity: {
     name: 'a velocity',

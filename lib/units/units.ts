@@ -8,7 +8,9 @@ const inch = 0.0254
 const foot = 12 * inch
 const pound = 0.45359237
 const ounce = pound / 16
-const poundForce = pound * 9.80665
+/** m/s². */
+export const standardGravity = 9.80665
+const poundForce = pound * standardGravity
 
 const unit = (factor: number, ...written: string[]) => ({ factor, written })
 
@@ -45,10 +47,13 @@ export const units = {
   lbf: unit(poundForce, 'lbf'),
   'N m': unit(1, 'n m', 'nm', 'n·m'),
   'kN m': unit(1e3, 'kn m', 'knm'),
+  'ozf in': unit((poundForce / 16) * inch, 'ozf in', 'in ozf'),
   'lbf ft': unit(poundForce * foot, 'lbf ft', 'lb ft', 'ft lbf', 'ft lb'),
   J: unit(1, 'j'),
   kJ: unit(1e3, 'kj'),
   'ft lbf': unit(poundForce * foot, 'ft lbf', 'ft lb'),
+  kW: unit(1e3, 'kw'),
+  hp: unit(550 * foot * poundForce, 'hp'),
   'm/s': unit(1, 'm/s'),
   'ft/min': unit(foot / 60, 'ft/min'),
   'ft/s': unit(foot, 'ft/s'),

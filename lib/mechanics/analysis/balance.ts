@@ -13,6 +13,13 @@ export interface Balance {
   grade: { permissibleKgMm: number; gradeMmS: number } | null
 }
 
+export const residualAnswer = (residual: ReturnType<typeof residualUnbalance>): Balance['residual'] => ({
+  staticKgMm: residual.static.size * KG_MM,
+  staticAngleDeg: residual.static.angle * DEGREES,
+  coupleKgMm2: residual.couple.size * KG_MM2,
+  coupleAngleDeg: residual.couple.angle * DEGREES,
+})
+
 export function balanceAnswer({ train, speed }: Plan, gradeMmS: number): Balance {
   const weights = bobWeights(train)
   const residual = residualUnbalance(train)
@@ -29,12 +36,7 @@ export function balanceAnswer({ train, speed }: Plan, gradeMmS: number): Balance
       const { mass, reciprocating, rotating, oil } = weights[index]
       return { kg: mass, reciprocatingKg: reciprocating, rotatingKg: rotating, oilKg: oil }
     }),
-    residual: {
-      staticKgMm: residual.static.size * KG_MM,
-      staticAngleDeg: residual.static.angle * DEGREES,
-      coupleKgMm2: residual.couple.size * KG_MM2,
-      coupleAngleDeg: residual.couple.angle * DEGREES,
-    },
+    residual: residualAnswer(residual),
     grade: permissible === null ? null : { permissibleKgMm: permissible * KG_MM, gradeMmS },
   }
 }

@@ -1,4 +1,4 @@
-import { fourierCoefficient, unitCircle, type Complex } from '@/lib/numerics/fourier'
+import { fourierCoefficient, harmonicOf, unitCircle, type Complex } from '@/lib/numerics/fourier'
 import type { Plan } from '../instant'
 import { DEGREES, type Recorder, type Samples } from './recorder'
 
@@ -16,7 +16,8 @@ export interface Order {
   torqueNm: number
 }
 
-const HIGHEST = 12
+/** The highest order that is told apart. */
+export const HIGHEST = 12
 
 /** Orders ½, 1, 1½ … 12 of a four-stroke, 1, 2 … 12 of a two-stroke, from all samples of the cycle. */
 export function ordersRecorder(plan: Plan, { all }: Samples): Recorder<Order[]> {
@@ -39,20 +40,26 @@ export function ordersRecorder(plan: Plan, { all }: Samples): Recorder<Order[]> 
         const [v, h, cv, ch] = [of(vertical), of(horizontal), of(coupleVertical), of(coupleHorizontal)]
         return {
           order: bin / turns,
-          vertical: { amplitudeN: 2 * modulus(v), phaseDeg: phase(v) },
-          horizontal: { amplitudeN: 2 * modulus(h), phaseDeg: phase(h) },
+          vertical: force(v),
+          horizontal: force(h),
           forwardN: Math.hypot(v.re - h.im, v.im + h.re),
           backwardN: Math.hypot(v.re + h.im, h.re - v.im),
-          coupleVertical: { amplitudeNm: 2 * modulus(cv), phaseDeg: phase(cv) },
-          coupleHorizontal: { amplitudeNm: 2 * modulus(ch), phaseDeg: phase(ch) },
+          coupleVertical: couple(cv),
+          coupleHorizontal: couple(ch),
           forwardNm: Math.hypot(cv.re - ch.im, cv.im + ch.re),
           backwardNm: Math.hypot(cv.re + ch.im, ch.re - cv.im),
-          torqueNm: 2 * modulus(of(torque)),
+          torqueNm: harmonicOf(of(torque)).amplitude,
         }
       })
     },
   }
 }
 
-const modulus = ({ re, im }: Complex) => Math.hypot(re, im)
-const phase = ({ re, im }: Complex) => (re === 0 && im === 0 ? 0 : -Math.atan2(im, re) * DEGREES)
+const force = (c: Complex) => {
+  const { amplitude, phase } = harmonicOf(c)
+  return { amplitudeN: amplitude, phaseDeg: phase * DEGREES }
+}
+const couple = (c: Complex) => {
+  const { amplitude, phase } = harmonicOf(c)
+  return { amplitudeNm: amplitude, phaseDeg: phase * DEGREES }
+}

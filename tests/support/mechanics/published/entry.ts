@@ -1,7 +1,7 @@
 import { readFileSync } from 'node:fs'
 import { expect } from 'vitest'
 
-export type Value = number | number[]
+export type Value = number | number[] | string
 interface Allowed {
   abs?: number
   rel?: number
@@ -65,6 +65,7 @@ const isPair = (figure: Figure): figure is { exact: number; printed: number } =>
   typeof figure === 'object' && !Array.isArray(figure)
 
 function within(name: string, actual: Value, wanted: Value, { abs = 0, rel = 0 }: Allowed) {
+  if (typeof actual === 'string' || typeof wanted === 'string') return expect(actual, name).toBe(wanted)
   const [a, w] = [[actual].flat(), [wanted].flat()]
   expect(a.length, name).toBe(w.length)
   a.forEach((value, i) => {

@@ -1,4 +1,6 @@
 import { energyFluctuation } from '@/lib/mechanics/analysis/torque'
+import { flywheelInertia, speedFluctuation, speedRange } from '@/lib/mechanics/loads/flywheel'
+import { momentFigures } from '@/lib/mechanics/loads/turning-moment'
 import { answer, instants } from '../kernel'
 import { inputs, type Case, type Figures } from './entry'
 import { DEG, FOOT, POUND, radPerSecond, single } from './rig'
@@ -6,14 +8,16 @@ import { DEG, FOOT, POUND, radPerSecond, single } from './rig'
 type Inputs = Record<string, number>
 const TURN = 2 * Math.PI
 
-/** Energy fluctuation by the kernel of a torque given as a function of the crank angle. */
-function fluctuation(torque: (angle: number) => number, cycle: number) {
+/** Mean and energy fluctuation by the kernel of a torque given as a function of the crank angle. */
+function figuresOf(torque: (angle: number) => number, cycle: number) {
   const count = 7200
-  return energyFluctuation(
+  return momentFigures(
     Array.from({ length: count }, (_, i) => torque((cycle * i) / count)),
     cycle,
   )
 }
+const fluctuation = (torque: (angle: number) => number, cycle: number) => figuresOf(torque, cycle).energy
+const kilowatts = (torque: number, speedRpm: number) => (torque * radPerSecond(speedRpm)) / 1000
 
 /** Energy fluctuation by the kernel of a torque that runs in triangles of these areas over and under its mean. */
 function fluctuationOfAreas(areas: number[]) {
@@ -24,9 +28,6 @@ function fluctuationOfAreas(areas: number[]) {
   )
   return energyFluctuation(torque, 1)
 }
-
-/** m k² = ΔE / (speed fluctuation · ω²). */
-const inertiaFor = (energy: number, share: number, speed: number) => energy / (share * speed ** 2)
 
 /** Between the extremes of energy and back to where it began. */
 const fromExtremes = ([high, low]: number[]) => [high, low - high, -low]
@@ -43,11 +44,26 @@ function expansionTriangle(net: number, expansion: number) {
 }
 
 export const flywheel: Record<string, Case> = {
+  'FLY-01': {
+    figures: (i) => {
+      const inertia = i.flywheelMass_kg * i.gyration_m ** 2
+      const { most, least } = speedRange(i.energyFluctuation_J, inertia, radPerSecond(i.meanSpeed_rpm))
+      return { maxSpeed_rpm: most / radPerSecond(1), minSpeed_rpm: least / radPerSecond(1) }
+    },
+  },
+  'FLY-02': {
+    figures: (i) => {
+      const workPerCycle = (i.power_kW * 1000 * 60) / i.speed_rpm
+      const energy = i.energyFluctuationCoefficient * workPerCycle
+      const inertia = flywheelInertia(energy, i.speedFluctuationCoefficient, radPerSecond(i.speed_rpm))
+      return { flywheelMass_kg: inertia / i.gyration_m ** 2 }
+    },
+  },
   'FLY-03': {
     figures: (i) => {
       const { energyExtremes_mm2 } = inputs<{ energyExtremes_mm2: number[] }>('FLY-03')
       const energy = fluctuationOfAreas(fromExtremes(energyExtremes_mm2)) * i.energyPerArea_J_mm2
-      const inertia = inertiaFor(energy, i.totalSpeedFluctuation, radPerSecond(i.speed_rpm))
+      const inertia = flywheelInertia(energy, i.totalSpeedFluctuation, radPerSecond(i.speed_rpm))
       return { flywheelMass_kg: inertia / i.gyration_m ** 2 }
     },
   },
@@ -57,7 +73,8 @@ export const flywheel: Record<string, Case> = {
       const energy = fluctuationOfAreas(fromExtremes(energyExtremes_mm2)) * i.energyPerArea_J_mm2
       const inertia = i.flywheelMass_kg * (i.gyration_mm / 1000) ** 2
       return {
-        speedFluctuationCoefficient_percent: (100 * energy) / (inertia * radPerSecond(i.speed_rpm) ** 2),
+        speedFluctuationCoefficient_percent:
+          100 * speedFluctuation(energy, inertia, radPerSecond(i.speed_rpm)),
       }
     },
   },
@@ -65,7 +82,7 @@ export const flywheel: Record<string, Case> = {
     figures: (i) => {
       const { areas_cm2 } = inputs<{ areas_cm2: number[] }>('FLY-05')
       const energy = fluctuationOfAreas(areas_cm2) * i.torqueScale_Nm_per_cm * i.angleScale_deg_per_cm * DEG
-      const inertia = inertiaFor(energy, i.speedFluctuationCoefficient, radPerSecond(i.speed_rpm))
+      const inertia = flywheelInertia(energy, i.speedFluctuationCoefficient, radPerSecond(i.speed_rpm))
       return { flywheelMass_kg: inertia / i.gyration_m ** 2, energyFluctuation_J: energy }
     },
   },
@@ -75,34 +92,70 @@ export const flywheel: Record<string, Case> = {
       const net = (i.power_kW * 1000 * 60) / (i.speed_rpm / 2)
       const energy = expansionTriangle(net, i.expansionWorkToNetWork * net)
       return {
-        flywheelInertia_kg_m2: inertiaFor(energy, i.totalSpeedFluctuation, radPerSecond(i.speed_rpm)),
+        flywheelInertia_kg_m2: flywheelInertia(energy, i.totalSpeedFluctuation, radPerSecond(i.speed_rpm)),
       }
     },
   },
   'FLY-09': {
     figures: (i) => {
-      const energy = fluctuation((a) => 20000 + 9500 * Math.sin(2 * a) - 5700 * Math.cos(2 * a), TURN)
-      const inertia = inertiaFor(energy, i.totalSpeedFluctuation, radPerSecond(i.speed_rpm))
+      const { energy, mean } = figuresOf((a) => 20000 + 9500 * Math.sin(2 * a) - 5700 * Math.cos(2 * a), TURN)
+      const inertia = flywheelInertia(energy, i.totalSpeedFluctuation, radPerSecond(i.speed_rpm))
       return {
         energyFluctuation_J: energy,
         flywheelInertia_kg_m2: inertia,
         angularAcceleration45_rad_s2: 9500 / inertia,
+        power_kW: kilowatts(mean, i.speed_rpm),
       }
     },
-    without: { power_kW: 'mean of a given torque times speed: the kernel’s mean torque is of a train' },
   },
   'FLY-11': {
     figures: (i) => {
       const share = (energy: number) =>
-        (100 * energy) / (i.flywheelInertia_kg_m2 * radPerSecond(i.speed_rpm) ** 2)
+        100 * speedFluctuation(energy, i.flywheelInertia_kg_m2, radPerSecond(i.speed_rpm))
+      const { energy, mean } = figuresOf((a) => 5000 + 1500 * Math.sin(3 * a), TURN)
       return {
-        speedFluctuation_percent: share(fluctuation((a) => 5000 + 1500 * Math.sin(3 * a), TURN)),
+        power_kW: kilowatts(mean, i.speed_rpm),
+        speedFluctuation_percent: share(energy),
         part2_speedFluctuation_percent: share(
           fluctuation((a) => 1500 * Math.sin(3 * a) - 600 * Math.sin(a), TURN),
         ),
       }
     },
-    without: { power_kW: 'mean of a given torque times speed: the kernel’s mean torque is of a train' },
+  },
+  'FLY-13': {
+    figures: (i) => {
+      const mean = (i.maxSpeed_rad_s + i.minSpeed_rad_s) / 2
+      const share = (i.maxSpeed_rad_s - i.minSpeed_rad_s) / mean
+      return { flywheelInertia_kg_m2: flywheelInertia(i.energyFluctuation_J, share, mean) }
+    },
+  },
+  'FLY-14': {
+    // C·ω² does not depend on ω, so at 1 rad/s C is ω·(ω_max − ω_min)
+    figures: (i) => ({
+      meanSpeed_rpm:
+        speedFluctuation(i.energyFluctuation_J, i.flywheelInertia_kg_m2, 1) /
+        radPerSecond(i.speedFluctuation_rpm) /
+        radPerSecond(1),
+    }),
+  },
+  'FLY-15': {
+    // a solid disc: I = m d²/8
+    figures: (i) => ({
+      flywheelMass_kg:
+        (8 *
+          flywheelInertia(
+            i.energyFluctuation_J,
+            i.speedFluctuationCoefficient,
+            radPerSecond(i.meanSpeed_rpm),
+          )) /
+        i.maxDiameter_m ** 2,
+    }),
+  },
+  'FLY-16': {
+    figures: (i) => {
+      const { mean } = figuresOf((a) => 10000 + 1000 * Math.sin(2 * a) - 1200 * Math.cos(2 * a), TURN)
+      return { power_kW: kilowatts(mean, i.speed_rpm) }
+    },
   },
   'FLY-19': {
     figures: (i) => {
@@ -112,7 +165,7 @@ export const flywheel: Record<string, Case> = {
         net,
         (net * i.expansionToCompressionWork) / (i.expansionToCompressionWork - 1),
       )
-      const inertia = inertiaFor(energy, i.speedFluctuationCoefficient, radPerSecond(i.speed_rpm))
+      const inertia = flywheelInertia(energy, i.speedFluctuationCoefficient, radPerSecond(i.speed_rpm))
       return { flywheelInertia_lb_ft2: inertia / POUND / FOOT ** 2 }
     },
   },
@@ -160,7 +213,7 @@ function twoTriangles(i: Inputs): Figures {
     meanTorque_Nm: torque.meanNm,
     energyFluctuationCoefficient_percent: (100 * torque.energyFluctuationJ) / (torque.meanNm * TURN),
     flywheelMass_kg:
-      inertiaFor(torque.energyFluctuationJ, i.totalSpeedFluctuation, speed) / i.gyration_m ** 2,
+      flywheelInertia(torque.energyFluctuationJ, i.totalSpeedFluctuation, speed) / i.gyration_m ** 2,
     minSpeedAngle_deg: crossing(5),
     maxSpeedAngle_deg: crossing(90),
   }

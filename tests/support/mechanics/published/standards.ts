@@ -1,3 +1,4 @@
+import { balanceGrades, crankDriveGrades } from '@/lib/mechanics/balance/two-planes'
 import { answer } from '../kernel'
 import type { Case } from './entry'
 import { single } from './rig'
@@ -14,6 +15,21 @@ export const standards: Record<string, Case> = {
       }
     },
   },
+  'STD-03': {
+    figures: () => {
+      const grade = (kind: keyof typeof crankDriveGrades) => `G${crankDriveGrades[kind]}`
+      return {
+        inherentlyBalancedRigidlyMounted: grade('inherently balanced, rigidly mounted'),
+        inherentlyBalancedElasticallyMounted: grade('inherently balanced, elastically mounted'),
+        completeEnginesCarsTrucksLocomotives: grade('complete engines of cars, trucks and locomotives'),
+        inherentlyUnbalancedRigidlyMounted: grade('inherently unbalanced, rigidly mounted'),
+        inherentlyUnbalancedElasticallyMounted: grade('inherently unbalanced, elastically mounted'),
+        slowMarineDieselBalanced: grade('large slow marine diesel, inherently balanced'),
+        slowMarineDieselUnbalanced: grade('large slow marine diesel, inherently unbalanced'),
+      }
+    },
+  },
+  'STD-04': { figures: () => ({ grades: [...balanceGrades] }) },
   'STD-09': {
     figures: (i) => {
       const it = single({
