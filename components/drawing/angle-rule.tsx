@@ -11,10 +11,12 @@ const say = (angle: number) => `${(Math.round(angle * degrees * 10) / 10).toFixe
 interface Props {
   clock: Clock
   events: { cylinder: number; angle: number }[]
+  /** Where more than one stands on a page. */
+  label?: string
 }
 
 /** A steel rule of one working cycle with the firing events on it; its cursor is the crank angle. */
-export function AngleRule({ clock, events }: Props) {
+export function AngleRule({ clock, events, label = 'Crank angle' }: Props) {
   const rule = useRef<SVGSVGElement>(null)
   const cursor = useRef<SVGGElement>(null)
   const flag = useRef<SVGTextElement>(null)
@@ -70,7 +72,7 @@ export function AngleRule({ clock, events }: Props) {
       viewBox={`${-margin} 0 ${width + 2 * margin} 56`}
       role="slider"
       tabIndex={0}
-      aria-label="Crank angle"
+      aria-label={label}
       aria-valuemin={0}
       aria-valuemax={cycleDeg}
       aria-valuenow={0}

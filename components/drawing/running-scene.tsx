@@ -1,110 +1,67 @@
 'use client'
 
-import { useEffect, useEffectEvent, useMemo, useRef, useState } from 'react'
-import { Icon } from '@/components/ui/icon'
-import { cameraOf } from '@/scene/frame/scene-camera'
+import { lazy, Suspense, useEffect, useId, useRef, useState } from 'react'
+import type { Train } from '@/lib/mechanics/train'
 import type { Scene } from '@/scene/model/scene'
-import { toTrain } from '@/scene/model/to-train'
-import { createClock, type Clock } from '@/scene/session/clock'
-import { buildStageModel } from '@/scene/stage/build-stage-model'
-import type { StageLook, StageModel } from '@/scene/stage/types'
-import { AngleRule } from './angle-rule'
-import { StageView } from './stage-view'
+import type { MovingScene } from './start-scene'
 
-const radians = Math.PI / 180
-const rpm = (2 * Math.PI) / 60
+// Two steps: first what moves, and once it is seen to move everything else. The poster is there before any script.
+const SceneDrive = lazy(() => import('./scene-drive'))
 
-/** A clock that stands where the scene was saved, and runs as it ran, unless motion is not wanted. */
-function clockOf(view: Scene['view'], cycle: number): Clock {
-  const clock = createClock(cycle)
-  clock.setAngle(view.angleDeg * radians)
-  clock.setRate((view.speedRpm * rpm) / view.slowdown)
-  clock.setReverse(view.reverse)
-  if (view.playing && !window.matchMedia('(prefers-reduced-motion: reduce)').matches) clock.play()
-  return clock
-}
-
-function lookOf(view: Scene['view']): StageLook {
-  return {
-    hidden: view.hidden,
-    ghost: view.ghost,
-    sectionAxial: view.sectionAxialMm === null ? null : view.sectionAxialMm / 1000,
-    overlays: view.overlays,
-    lit: [],
-    balloons: [],
-    forceUnit: 'N',
-  }
-}
-
-interface Props {
+export interface RunningSceneProps {
   scene: Scene
+  train: Train
+  /** Address of the same picture, drawn by the server at the saved angle and view. */
+  poster: string
   label: string
+  /** Words for those who see no picture. */
   description: string
-  onRunning(): void
 }
 
-export function RunningScene({ scene, label, description, onRunning }: Props) {
-  const { train: document, view } = scene
-  const train = useMemo(() => toTrain(document), [document])
-  const model = useMemo(
-    () => buildStageModel(document, train, view.speedRpm * rpm),
-    [document, train, view.speedRpm],
-  )
-  const [clock] = useState(() => clockOf(view, train.cycle))
-  const look = useMemo(() => lookOf(view), [view])
-  const camera = useMemo(() => (view.camera ? cameraOf(view.camera) : null), [view])
-  const seen = useRef(false)
+export function RunningScene({ scene, train, poster, label, description }: RunningSceneProps) {
+  const host = useRef<HTMLDivElement>(null)
+  const words = useId()
+  const [seen, setSeen] = useState<MovingScene | null>(null)
+  useEffect(() => {
+    let gone = false
+    let moving: MovingScene | null = null
+    void import('./start-scene').then(async ({ startScene }) => {
+      if (gone || !host.current) return
+      moving = await startScene(host.current, scene, train, () => setSeen(moving))
+      if (gone) moving.stage.dispose()
+    })
+    return () => {
+      gone = true
+      setSeen(null)
+      moving?.stage.dispose()
+    }
+  }, [scene, train])
+  const dark = `${poster}${poster.includes('?') ? '&' : '?'}theme=dark`
+  const alt = seen ? '' : description
   return (
-    <>
-      <StageView
-        className="stage-host"
-        clock={clock}
-        model={model}
-        look={look}
-        camera={camera}
-        label={label}
-        description={description}
-        onTick={() => {
-          if (seen.current) return
-          seen.current = true
-          onRunning()
-        }}
-      />
-      <Drive clock={clock} model={model} slowdown={view.slowdown} />
-    </>
-  )
-}
-
-function Drive({ clock, model, slowdown }: { clock: Clock; model: StageModel; slowdown: number }) {
-  const [playing, setPlaying] = useState(clock.playing)
-  const follow = useEffectEvent(() => setPlaying(clock.playing))
-  useEffect(() => clock.subscribe(follow), [clock])
-  const step = (degrees: number) => {
-    clock.pause()
-    clock.setAngle(clock.angle + degrees * radians)
-  }
-  return (
-    <div className="live-drive">
-      <div className="btns">
-        <button
-          type="button"
-          className="btn pri ic"
-          aria-label={playing ? 'Pause' : 'Play'}
-          onClick={() => (playing ? clock.pause() : clock.play())}
-        >
-          <Icon name={playing ? 'pause' : 'play'} />
-        </button>
-        <button type="button" className="btn ic" aria-label="Back 1 degree" onClick={() => step(-1)}>
-          <Icon name="back" />
-        </button>
-        <button type="button" className="btn ic" aria-label="On 1 degree" onClick={() => step(1)}>
-          <Icon name="on" />
-        </button>
+    <div className="live-scene" data-running={seen ? true : undefined}>
+      <div className="poster" aria-hidden={seen ? true : undefined}>
+        <img className="only-light" src={poster} alt={alt} loading="lazy" />
+        <img className="only-dark" src={dark} alt={alt} loading="lazy" />
       </div>
-      <AngleRule clock={clock} events={model.events} />
-      <span className="cap pace">
-        {slowdown > 1 ? `Shown at 1 : ${Math.round(slowdown)}` : 'Shown at full speed'}
-      </span>
+      <div
+        ref={host}
+        className="stage-host"
+        style={{ position: 'relative', width: '100%', height: '100%' }}
+        role="application"
+        aria-roledescription="moving drawing"
+        aria-label={label}
+        aria-describedby={words}
+        tabIndex={0}
+      />
+      <p className="vh" id={words}>
+        {description}
+      </p>
+      {seen ? (
+        <Suspense>
+          <SceneDrive scene={scene} train={train} moving={seen} />
+        </Suspense>
+      ) : null}
     </div>
   )
 }

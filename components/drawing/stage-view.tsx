@@ -1,15 +1,19 @@
 'use client'
 
-import { useEffect, useEffectEvent, useId, useRef } from 'react'
-import { createStage } from '@/scene/stage/create-stage'
+import { useEffect, useEffectEvent, useId, useMemo, useRef } from 'react'
 import type { Camera } from '@/scene/frame/types'
 import type { Clock } from '@/scene/session/clock'
+import { createDetails } from '@/scene/stage/create-details'
+import { createStage } from '@/scene/stage/create-stage'
+import { cutRig } from '@/scene/stage/cut-rig'
 import type { NamedView, RendererKind, Stage, StageEvents, StageLook, StageModel } from '@/scene/stage/types'
 
 export interface StageViewProps extends StageEvents {
   clock: Clock
   model: StageModel
   look: StageLook
+  /** Section plane across the crank, m, or none. */
+  sectionAxial?: number | null
   camera?: Camera | null
   renderer?: RendererKind | 'auto'
   pane?: NamedView
@@ -23,7 +27,9 @@ export interface StageViewProps extends StageEvents {
 
 /** React's hand on a stage: mounts it once, passes changes on, and never re-renders for an angle. */
 export function StageView(props: StageViewProps) {
-  const { clock, model, look, camera, renderer = 'auto', pane, label, description, className } = props
+  const { clock, look, camera, renderer = 'auto', pane, label, description, className } = props
+  const { model: whole, sectionAxial = null } = props
+  const model = useMemo(() => ({ ...whole, rig: cutRig(whole.rig, sectionAxial) }), [whole, sectionAxial])
   const words = useId()
   const host = useRef<HTMLDivElement>(null)
   const stage = useRef<Stage | null>(null)
@@ -46,6 +52,7 @@ export function StageView(props: StageViewProps) {
       { onPick, onHover, onBalloon, onCamera, onRenderer, onTick },
       { renderer: start.renderer, pane, motion: !still },
     )
+    created.enrich(createDetails)
     created.setModel(start.model)
     created.setLook(start.look)
     created.setCamera(start.camera)

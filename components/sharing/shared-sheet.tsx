@@ -3,11 +3,13 @@ import { GuestSheet } from '@/components/shell/guest-sheet'
 import { TitleActions, TitleBlock, TitleCell } from '@/components/shell/title-block'
 import type { SharedScene } from '@/lib/contracts/share-links'
 import type { TrainSummary } from '@/scene/model/summary'
+import { CountOpening } from './count-opening'
 import { PrintButton } from './print-button'
 
 interface Props {
   shared: SharedScene
-  poster: string
+  /** Under which the link's own addresses stand. */
+  base: string
   summary: TrainSummary
 }
 
@@ -19,13 +21,14 @@ const day = new Intl.DateTimeFormat('en-GB', {
 })
 
 /** What a share link opens: the drawing at the saved angle and view, its figures in words, and whose it is. */
-export function SharedSheet({ shared, poster, summary }: Props) {
+export function SharedSheet({ shared, base, summary }: Props) {
   return (
     <GuestSheet brand={shared.workshop} className="share" words="No account needed">
+      <CountOpening address={`${base}/openings`} />
       <section className="stage" aria-label="Drawing">
         <LiveScene
           scene={shared.document}
-          poster={poster}
+          poster={`${base}/poster.png`}
           label={shared.title}
           description={summary.sentence}
         />

@@ -3,10 +3,9 @@ import { frameBytes, readFrame, type FrameBuffer, type Painted } from './protoco
 import { paint } from './raster/paint'
 import type { RigShape } from './raster/prepare'
 import { createRaster, setRig, setSize, setTheme, setVisibility } from './raster/raster'
-import { addSample, allSamples, firstSamples, showSamples } from './raster/refine'
 import { createResolution } from './resolution'
 import type { Sheet } from './sheet'
-import type { Raster, RasterFrame } from './raster/types'
+import type { Fine, Raster, RasterFrame } from './raster/types'
 
 /** Paints frames onto a sheet and refines the one that stands still, in a worker or on the page. */
 export interface Painter {
@@ -14,6 +13,8 @@ export interface Painter {
   setTheme(theme: InkTheme): void
   setVisibility(visibility: Visibility): void
   resize(width: number, height: number, ratio: number): void
+  /** From now on pictures are fine. */
+  enrich(fine: Fine): void
   /** Paints at once, and if it is a still frame goes on refining it until the next call. */
   draw(frame: RasterFrame, still: boolean): Painted
   dispose(): void
@@ -26,10 +27,11 @@ export interface Pacing {
   soon(step: () => void): void
 }
 
-export function createPainter(sheet: Sheet, pacing: Pacing): Painter {
+export function createPainter(sheet: Sheet, pacing: Pacing, startFine: Fine | null = null): Painter {
   const resolution = createResolution()
   const painted: Painted = { milliseconds: 0, width: 0, height: 0 }
   const size = { width: 1, height: 1, ratio: 1 }
+  let fine = startFine
   let raster: Raster | null = null
   let theme: InkTheme | null = null
   let rig: RigShape | null = null
@@ -45,7 +47,7 @@ export function createPainter(sheet: Sheet, pacing: Pacing): Painter {
   const setUp = () => {
     if (!rig || !theme) return
     if (raster) setRig(raster, rig)
-    else raster = createRaster(rig, theme)
+    else raster = createRaster(rig, theme, fine)
     if (visibility) setVisibility(raster, visibility)
     const { partCount, cylinderCount } = raster.flat
     last = readFrame(new ArrayBuffer(frameBytes(partCount, cylinderCount)), partCount)
@@ -70,18 +72,19 @@ export function createPainter(sheet: Sheet, pacing: Pacing): Painter {
     const pixels = raster.width * raster.height
     if (!lastStill) resolution.add(painted.milliseconds, pixels, width * height * ratio * ratio)
     const mine = ++turn
-    if (lastStill) pacing.soon(() => refine(mine, 0))
+    const { fine } = raster
+    if (lastStill && fine) pacing.soon(() => refine(fine, mine, 0))
   }
 
-  const refine = (mine: number, sample: number) => {
+  const refine = (fine: Fine, mine: number, sample: number) => {
     if (mine !== turn || !raster) return
-    addSample(raster, sample)
+    fine.addSample(raster, sample)
     const samples = sample + 1
-    if (samples === firstSamples || samples === allSamples) {
-      showSamples(raster, samples)
+    if (samples === fine.firstSamples || samples === fine.allSamples) {
+      fine.showSamples(raster, samples)
       sheet.put(raster.image, raster.drawn)
     }
-    if (samples < allSamples) pacing.soon(() => refine(mine, samples))
+    if (samples < fine.allSamples) pacing.soon(() => refine(fine, mine, samples))
   }
 
   /** Draws the last frame again unless a new one comes first. */
@@ -115,6 +118,11 @@ export function createPainter(sheet: Sheet, pacing: Pacing): Painter {
       size.height = Math.max(1, height)
       size.ratio = ratio
       stale = true
+    },
+    enrich(next) {
+      fine = next
+      if (raster) raster.fine = next
+      redrawSoon()
     },
     draw(frame, still) {
       if (!last) return painted

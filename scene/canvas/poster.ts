@@ -1,8 +1,8 @@
 import type { InkTheme, Pose, Visibility } from '@/scene/frame/types'
+import { fine } from './raster/fine'
 import { paint } from './raster/paint'
 import type { RigShape } from './raster/prepare'
 import { createRaster, setSize, setVisibility } from './raster/raster'
-import { addSample, showSamples } from './raster/refine'
 
 export interface PosterView {
   viewProjection: Float64Array
@@ -24,14 +24,14 @@ export function drawPoster(
   height: number,
   samples: number,
 ): Uint8ClampedArray<ArrayBuffer> {
-  const raster = createRaster(rig, theme)
+  const raster = createRaster(rig, theme, fine)
   const tint = view.tint ?? new Float32Array(raster.flat.cylinderCount)
   if (visibility) setVisibility(raster, visibility)
   setSize(raster, width, height, view.ratio ?? 1)
   paint(raster, { pose, viewProjection: view.viewProjection, eye: view.eye, tint })
   if (samples > 1) {
-    for (let sample = 0; sample < samples; sample++) addSample(raster, sample)
-    showSamples(raster, samples)
+    for (let sample = 0; sample < samples; sample++) fine.addSample(raster, sample)
+    fine.showSamples(raster, samples)
   }
   return new Uint8ClampedArray(raster.image.buffer)
 }

@@ -8,8 +8,18 @@ const answer = (message: Answer, lent: Transferable[] = []) => self.postMessage(
 
 let painter: Painter | null = null
 let parts = 0
+let frames = 0
+let fine: Promise<void> | null = null
 
-self.onmessage = ({ data }: MessageEvent<Order>) => {
+/** Once the engine has moved, or where it stands still: what moves does not wait for it. */
+const makeFine = (): Promise<void> =>
+  (fine ??= import('./raster/fine').then(
+    (module) => painter?.enrich(module.fine),
+    // without it the picture is plainer; it is asked for again with the next still one
+    () => void (fine = null),
+  ))
+
+async function carryOut(data: Order): Promise<void> {
   if (data.kind === 'canvas') {
     const sheet = createSheet(data.canvas)
     painter = sheet && createPainter(sheet, pagePacing)
@@ -23,9 +33,19 @@ self.onmessage = ({ data }: MessageEvent<Order>) => {
   else if (data.kind === 'visibility') painter.setVisibility(data.visibility)
   else if (data.kind === 'size') painter.resize(data.width, data.height, data.ratio)
   else {
+    // two pictures have been seen when the third is asked for
+    frames++
+    if (data.still) await makeFine()
+    else if (frames === 3) void makeFine()
     const painted = painter.draw(readFrame(data.buffer, parts), data.still)
     answer({ kind: 'painted', buffer: data.buffer, painted }, [data.buffer])
   }
+}
+
+/** In the order in which they came, also where one of them has to wait. */
+let last = Promise.resolve()
+self.onmessage = ({ data }: MessageEvent<Order>) => {
+  last = last.then(() => carryOut(data)).catch(reportError)
 }
 
 answer({ kind: 'able', able: new OffscreenCanvas(1, 1).getContext('2d') !== null })

@@ -34,17 +34,9 @@ export function buildRig(document: CrankTrain, train: Train): Rig {
     freeEnd: [0, 0, ends.free],
     driveEnd: [0, 0, ends.drive],
   }
-  const bounds = new Float64Array(6)
-  const rig: Rig = {
-    meshes: parts.meshes,
-    parts: parts.parts,
-    mirror,
-    bounds,
-    anchors,
-    drive: parts.finish(drive),
-  }
-  bounds.set(boundsOf(extentOf(rig)))
-  return rig
+  const moving = { meshes: parts.meshes, parts: parts.parts, drive: parts.finish(drive) }
+  const extent = extentOf(moving)
+  return { ...moving, mirror, bounds: boundsOf(extent), extent, anchors }
 }
 
 type CylinderAnchors = Pick<Anchors, 'crown' | 'firing' | 'cylinderLabel'>

@@ -1,16 +1,12 @@
-import { cornersOf, extentOf } from './extent'
+import { cornersOf } from './extent'
+import type { NamedView } from './named-views'
 import type { Camera, Rig } from './types'
-import { defaultPitch, defaultYaw, eyeDirection } from './view-direction'
+import { defaultPitch, defaultYaw } from './view-direction'
 
 /** Full vertical angle of the lens; LOOK allows no stronger perspective than 20°. */
 const FOV = (16 * Math.PI) / 180
 /** Share of the sheet that a framed engine may fill. */
 const FILL = 0.92
-const STEEPEST = Math.PI / 2
-const FARTHEST = 12
-
-export const namedViews = ['free', 'end', 'drive', 'side', 'bank', 'top'] as const
-export type NamedView = (typeof namedViews)[number]
 
 export interface ViewDirection {
   yaw: number
@@ -18,7 +14,7 @@ export interface ViewDirection {
 }
 
 /** The camera's own axes in the world: to the right, up, and towards the eye. All written into one array of nine. */
-function fillAxes(out: Float64Array | number[], { yaw, pitch }: ViewDirection) {
+export function fillAxes(out: Float64Array | number[], { yaw, pitch }: ViewDirection) {
   const cosYaw = Math.cos(yaw)
   const sinYaw = Math.sin(yaw)
   const cosPitch = Math.cos(pitch)
@@ -91,13 +87,13 @@ export const frameCamera = (bounds: ArrayLike<number>, aspect: number, direction
 
 /** A named view with the whole engine on the sheet, at whatever angle the crank stands. */
 export const namedCamera = (name: NamedView, rig: Rig, aspect: number): Camera =>
-  framePoints(extentOf(rig), aspect, directionOf(name, rig))
+  framePoints(rig.extent, aspect, directionOf(name, rig))
 
 /**
  * The nearest camera that has all points on the sheet. Every point bounds the eye by the four planes of the lens, so the
  * target lies half-way between the extremes and the distance is the greater of the two that they ask for.
  */
-function framePoints(points: readonly number[], aspect: number, { yaw, pitch }: ViewDirection): Camera {
+function framePoints(points: ArrayLike<number>, aspect: number, { yaw, pitch }: ViewDirection): Camera {
   fillAxes(axes, { yaw, pitch })
   const tangent = [Math.tan(FOV / 2) * aspect * FILL, Math.tan(FOV / 2) * FILL]
   const most = [-Infinity, -Infinity]
@@ -139,43 +135,4 @@ function bankPitch(rig: Rig): number {
   const lean = Math.max(...(near.length > 0 ? near : [0]))
   // a bank on its side is looked at from above
   return lean > 0.49 * Math.PI ? Math.PI / 2 : -lean
-}
-
-/** Turned about its target; over the top and no further. */
-export function orbit(camera: Camera, dyaw: number, dpitch: number): Camera {
-  const pitch = Math.min(Math.max(camera.pitch + dpitch, -STEEPEST), STEEPEST)
-  return { ...camera, yaw: wrapped(camera.yaw + dyaw), pitch }
-}
-
-const wrapped = (angle: number) => angle - 2 * Math.PI * Math.round(angle / (2 * Math.PI))
-
-/** Moves the picture to the right and up by these shares of the sheet's height. */
-export function pan(camera: Camera, right: number, up: number): Camera {
-  fillAxes(axes, camera)
-  const height = 2 * camera.distance * Math.tan(camera.fov / 2)
-  const target = camera.target.map((at, k) => at - height * (axes[k] * right + axes[3 + k] * up))
-  return { ...camera, target: target as [number, number, number] }
-}
-
-/** Nearer (factor < 1) or farther; the eye stays outside the engine's box and in sight of it. */
-export function zoom(camera: Camera, factor: number, bounds: ArrayLike<number>): Camera {
-  return keptOutside({ ...camera, distance: camera.distance * factor }, bounds)
-}
-
-/** The camera, moved back along its line of sight where the eye would stand in the engine's box. */
-export function keptOutside(camera: Camera, bounds: ArrayLike<number>): Camera {
-  const size = Math.hypot(bounds[3] - bounds[0], bounds[4] - bounds[1], bounds[5] - bounds[2])
-  const direction = eyeDirection(camera.yaw, camera.pitch)
-  let exit = Infinity
-  let enter = -Infinity
-  for (let k = 0; k < 3; k++) {
-    const one = (bounds[k] - camera.target[k]) / direction[k]
-    const other = (bounds[k + 3] - camera.target[k]) / direction[k]
-    if (Number.isNaN(one) || Number.isNaN(other)) continue
-    enter = Math.max(enter, Math.min(one, other))
-    exit = Math.min(exit, Math.max(one, other))
-  }
-  const crossed = exit > enter && exit > 0
-  const least = (crossed ? exit : 0) + 0.03 * size
-  return { ...camera, distance: Math.min(Math.max(camera.distance, least), FARTHEST * size) }
 }

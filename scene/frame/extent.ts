@@ -1,6 +1,8 @@
 import { buildPose, fillPose } from './pose'
 import type { Pose, Rig } from './types'
 
+type Moving = Pick<Rig, 'meshes' | 'parts' | 'drive'>
+
 /** Angles of the crank, and directions round a turning part, at which its reach is taken. */
 const STEPS = 24
 
@@ -8,7 +10,7 @@ const STEPS = 24
  * Points that hold the whole engine over a whole turn, flat x, y, z: corners of the boxes of what stands or swings, and a
  * ring at either end of what turns about an axis of its own.
  */
-export function extentOf(rig: Rig): number[] {
+export function extentOf(rig: Moving): Float64Array {
   const points: number[] = []
   const pose = buildPose(rig)
   for (let step = 0; step < STEPS; step++) {
@@ -21,10 +23,10 @@ export function extentOf(rig: Rig): number[] {
   rig.parts.forEach(({ motion }, part) => {
     if (motion.kind === 'crank' || motion.kind === 'shaft') addRings(points, rig, pose, part)
   })
-  return points
+  return Float64Array.from(points)
 }
 
-function addCorners(points: number[], rig: Rig, pose: Pose, part: number) {
+function addCorners(points: number[], rig: Moving, pose: Pose, part: number) {
   const { box } = rig.meshes[rig.parts[part].mesh]
   const at = 4 * part
   for (let corner = 0; corner < 8; corner++) {
@@ -38,7 +40,7 @@ function addCorners(points: number[], rig: Rig, pose: Pose, part: number) {
   }
 }
 
-function addRings(points: number[], rig: Rig, pose: Pose, part: number) {
+function addRings(points: number[], rig: Moving, pose: Pose, part: number) {
   const { positions, box } = rig.meshes[rig.parts[part].mesh]
   let square = 0
   for (let i = 0; i < positions.length; i += 3)
@@ -53,7 +55,7 @@ function addRings(points: number[], rig: Rig, pose: Pose, part: number) {
 }
 
 /** minX, minY, minZ, maxX, maxY, maxZ */
-export function boundsOf(points: readonly number[]): Float64Array {
+export function boundsOf(points: Float64Array): Float64Array {
   const bounds = Float64Array.of(Infinity, Infinity, Infinity, -Infinity, -Infinity, -Infinity)
   points.forEach((value, i) => {
     const axis = i % 3

@@ -36,13 +36,13 @@ export interface Drive extends RigDrive {
   points: Float64Array
 }
 
-export const buildPose = (rig: Rig): Pose => new Float64Array(4 * rig.parts.length)
+export const buildPose = (rig: Pick<Rig, 'parts'>): Pose => new Float64Array(4 * rig.parts.length)
 
 /**
  * Places every part at a crank angle, exactly: the crank pin on its circle (or the knuckle on its master rod), the
  * piston pin where the rod's length puts it on the cylinder's axis. Nothing is allocated.
  */
-export function fillPose(out: Pose, rig: Rig, angle: number): Pose {
+export function fillPose(out: Pose, rig: Pick<Rig, 'drive'>, angle: number): Pose {
   const drive = rig.drive as Drive
   placeCylinders(drive, angle)
   const { kind, index, cosPhase, sinPhase, atX, atY, ratio, mirror, cosBank, sinBank, points } = drive

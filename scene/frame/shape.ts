@@ -4,8 +4,11 @@ import type { CrankTrain } from '@/scene/model/crank-train'
 /** Sizes of the drawn parts that the train does not know, in metres. */
 export interface Shape {
   pinRadius: number
+  /** Radius of the bore through it; 0 where it is solid. */
+  pinBore: number
   pinLength: number
   mainRadius: number
+  mainBore: number
   mainLength: number
   webThickness: number
   webWidth: number
@@ -18,6 +21,9 @@ export interface Shape {
 /** Steel, kg/m³ (common practice). */
 export const STEEL = 7850
 
+/** A bore wider than this share of its pin is drawn so wide: a wall must be left to draw. */
+const thinnestWall = 0.95
+
 /** The document's sizes; what it leaves out follows the bore and the room along the crank (common practice). */
 export function readShape(document: CrankTrain, train: Train): Shape {
   const given = document.shape ?? {}
@@ -27,10 +33,13 @@ export function readShape(document: CrankTrain, train: Train): Shape {
   const room = roomBesideThrow(train) ?? 0.58 * bore
   const shared = train.cylinders.length > train.throws.length
   const pinRadius = metres(given.pinDiaMm, 0.56 * bore) / 2
+  const mainRadius = metres(given.mainDiaMm, 0.66 * bore) / 2
   return {
     pinRadius,
+    pinBore: Math.min(metres(given.pinBoreMm, 0) / 2, thinnestWall * pinRadius),
     pinLength: metres(given.pinLengthMm, (shared ? 0.84 : 0.5) * room),
-    mainRadius: metres(given.mainDiaMm, 0.66 * bore) / 2,
+    mainRadius,
+    mainBore: Math.min(metres(given.mainBoreMm, 0) / 2, thinnestWall * mainRadius),
     mainLength: metres(given.mainLengthMm, (shared ? 0.42 : 0.5) * room),
     webThickness: metres(given.webThicknessMm, (shared ? 0.37 : 0.5) * room),
     webWidth: metres(given.webWidthMm, bore),

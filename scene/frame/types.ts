@@ -86,6 +86,8 @@ export interface Rig {
   mirror: -1 | 1
   /** Box of everything over a whole turn: minX … maxZ. The camera frames it. */
   bounds: Float64Array
+  /** Points that hold everything over a whole turn, x, y, z in turn: named views frame them. */
+  extent: Float64Array
   anchors: Anchors
   /** Private to fillPose: lengths, angles and indices in flat arrays. */
   drive: RigDrive

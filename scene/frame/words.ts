@@ -2,7 +2,13 @@ import type { Instant } from '@/lib/mechanics/instant'
 import type { Train } from '@/lib/mechanics/train'
 import { quantityText } from '@/lib/units/format'
 import type { System } from '@/lib/units/quantities'
-import { buildFiringMarkers, fillFiringMarkers, burnOf, type FiringEvent } from './firing-markers'
+import {
+  buildFiringMarkers,
+  burnOf,
+  fillFiringMarkers,
+  type FiringEvent,
+  type FiringMarkers,
+} from './firing-markers'
 
 /**
  * The text twin of what runs: "Crank 22.0°. Cylinder 1 is firing, 44.0 kN on its piston. Cylinder 8 fires next, in 68.0°."
@@ -23,11 +29,11 @@ export function stateInWords(
     instant.angle,
   )
   const burning = train.cylinders.flatMap((_, i) => (markers.burning[i] ? [i] : []))
-  const next = upcoming(markers.since, events, train.cycle)
+  const next = upcoming(markers, events, train.cycle)
   return [
     crank,
     ...burning.map((i) => firingSentence(train, instant, i, system)),
-    nextSentence(train, next, system),
+    ...(next ? [nextSentence(train, next, system)] : []),
   ].join(' ')
 }
 
@@ -37,10 +43,13 @@ function firingSentence(train: Train, instant: Instant, index: number, system: S
   return `Cylinder ${id} is firing, ${quantityText(instant.gasForce[index], 'force', system)} on its piston.`
 }
 
-function upcoming(since: Float64Array, events: readonly FiringEvent[], cycle: number) {
+/** Who fires next of those that do not burn: a charge lit before its top dead centre is firing, not yet to fire. */
+function upcoming({ since, burning }: FiringMarkers, events: readonly FiringEvent[], cycle: number) {
   return events
+    .filter(({ cylinder }) => burning[cylinder] === 0)
     .map(({ cylinder }) => ({ cylinder, wait: cycle - since[cylinder] }))
-    .reduce((soonest, event) => (event.wait < soonest.wait ? event : soonest))
+    .sort((one, other) => one.wait - other.wait)
+    .at(0)
 }
 
 function nextSentence(train: Train, next: { cylinder: number; wait: number }, system: System): string {

@@ -3,8 +3,7 @@ import { HIDDEN } from '@/scene/frame/types'
 import { createPlaces, layOut, uncross, type BalloonPlaces } from './balloon-places'
 import type { Palette } from './palette'
 import { solid, type Pen } from './paint-arrow'
-import type { Picture } from './picture'
-import type { Balloon } from './types'
+import type { Balloon, Picture } from './types'
 
 /** Numbered balloons of the parts list: buttons down the sides of the sheet, leaders on the overlay. */
 export interface Balloons {

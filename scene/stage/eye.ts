@@ -1,5 +1,5 @@
 import type { Camera } from '@/scene/frame/types'
-import { blendCamera, copyCamera } from './camera-moves'
+import { blendCamera, copyCamera } from './camera-blend'
 
 /** The camera that draws, and where it is going. Moves cut, or ease for 200 ms where motion is allowed. */
 export interface Eye {

@@ -1,4 +1,4 @@
-import { orbit, zoom } from '@/scene/frame/camera'
+import { orbit, zoom } from '@/scene/frame/camera-moves'
 import type { Camera } from '@/scene/frame/types'
 import type { Clock } from '@/scene/session/clock'
 import { drag, shove, zoomAt } from './camera-moves'

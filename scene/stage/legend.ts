@@ -16,7 +16,7 @@ const rowHeight = 18
 export const legendRoom = (rows: LegendRow[]) =>
   rows.length === 0
     ? { width: 0, height: 0 }
-    : { width: width + 2 * margin, height: firstRow + rowHeight * rows.length + margin }
+    : { width: width + 2 * margin, height: firstRow + rowHeight * (rows.length + 1) + margin }
 
 /** The one scale of force as a bar with its value, and what the vectors are, at the sheet's top right. */
 export function paintLegend(
@@ -40,11 +40,11 @@ export function paintLegend(
   pen.fillStyle = palette.ink
   pen.font = palette.headFont
   pen.fillText('Forces', left, y)
+  // the bar has a row of its own: beside the word a long one would run into it
+  y += rowHeight
   pen.font = palette.figureFont
-  pen.textAlign = 'right'
-  pen.fillText(bar.label, left + width, y)
-  const end = left + width - pen.measureText(bar.label).width - 8
-  ticked(pen, palette, end - bar.length, end, y)
+  pen.fillText(bar.label, left + bar.length + 8, y)
+  ticked(pen, palette, left, left + bar.length, y)
   for (const { form, text } of rows) {
     y += rowHeight
     paintArrow(pen, palette, form, left, y, left + 34, y)

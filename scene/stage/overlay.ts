@@ -9,14 +9,14 @@ import { paintArrow, paintRing, type ArrowForm, type Pen } from './paint-arrow'
 import { paintDiamond } from './paint-diamond'
 import { paintPath, type PathForm } from './paint-path'
 import type { Palette } from './palette'
-import type { Picture } from './picture'
+import type { ForcedPicture } from './forced-picture'
 import { scaleBar, type ScaleBar } from './scale-bar'
 import { createPath, fillCoupleArc, fillRotation, type SpacePath } from './space-paths'
 import type { StageLook } from './types'
 
 /** The vectors and marks over the engine: their buffers live as long as the picture does. */
 export interface Overlay {
-  picture: Picture
+  picture: ForcedPicture
   arrows: Arrows
   /** Of world per newton: the page's one scale. */
   metresPerNewton: number
@@ -40,10 +40,10 @@ export interface OverlayView {
   rows: LegendRow[]
 }
 
-export function createOverlay(picture: Picture): Overlay {
+export function createOverlay(picture: ForcedPicture): Overlay {
   const { model, rig } = picture
   const { referenceAxial } = model.plan.train
-  const { metresPerNewton } = niceScale(model.peakForce, boreStack(rig))
+  const metresPerNewton = model.metresPerNewton ?? niceScale(model.peakForce, boreStack(rig)).metresPerNewton
   const orbit = fillOrbitPath(buildOrbitPath(model.orbit), rig, model.orbit, referenceAxial, metresPerNewton)
   const rotation = createPath(32)
   fillRotation(rotation, rig)

@@ -1,6 +1,5 @@
 /** How the stage's layers lie over one another and how what is written on them looks; one sheet a document. */
 const css = `
-.stage-engine { background: var(--paper); }
 .stage-layer { position: absolute; inset: 0; width: 100%; height: 100%; display: block; }
 .stage-over { pointer-events: none; }
 .stage-surface { touch-action: none; cursor: grab; }

@@ -1,18 +1,35 @@
 import type { Instant, Plan } from '@/lib/mechanics/instant'
-import { namedViews, type NamedView } from '@/scene/frame/camera'
-import type { Camera, PartGroup, Rig } from '@/scene/frame/types'
+import type { NamedView } from '@/scene/frame/named-views'
+import type { Camera, Frame, PartGroup, Pose, Rig, Visibility } from '@/scene/frame/types'
 import type { Overlays } from '@/scene/model/scene'
 import type { Clock } from '@/scene/session/clock'
+import type { Eye } from './eye'
+import type { Palette } from './palette'
 
-/** What stands on the stage: made anew (by memo) when the document or the speed changes, never per frame. */
-export interface StageModel {
+/** All that a picture needs to move. */
+export interface MovingModel {
   rig: Rig
+}
+
+/** Everything one stage moves its parts with, in buffers that live as long as the model does. */
+export interface Picture {
+  model: MovingModel
+  rig: Rig
+  pose: Pose
+  visibility: Visibility
+  frame: Frame
+}
+
+/** What follows from the speed. */
+export interface Forces {
   /** The kernel's plan at the speed that the forces are for. */
   plan: Plan
   /** Firing events over one cycle, rad, in order. */
   events: { cylinder: number; angle: number }[]
   /** Largest force over the cycle, N: it sets the page's one scale of force. */
   peakForce: number
+  /** The scale of force in metres a newton, where several drawings share one; else `peakForce` sets it. */
+  metresPerNewton?: number
   /** Couple drawn as a full arc, N m: the cycle's largest, but never one that is next to nothing for such a crank. */
   fullCouple: number
   /** Highest pressure over any piston in the cycle, Pa: a crown is tinted by its share of it. */
@@ -21,7 +38,10 @@ export interface StageModel {
   orbit: Float64Array
 }
 
-export { namedViews, type NamedView }
+/** What stands on the stage: made anew (by memo) when the document or the speed changes, never per frame. */
+export interface StageModel extends MovingModel, Forces {}
+
+export { namedViews, type NamedView } from '@/scene/frame/named-views'
 
 export interface Balloon {
   /** The number in the parts list. */
@@ -34,8 +54,6 @@ export interface Balloon {
 export interface StageLook {
   hidden: PartGroup[]
   ghost: PartGroup[]
-  /** Section plane across the crank, m, or none. */
-  sectionAxial: number | null
   overlays: Overlays
   /** Picked or pointed at in the parts list: part ids. */
   lit: string[]
@@ -54,7 +72,9 @@ export interface StageEvents {
   onCamera?(camera: Camera): void
   /** Which renderer draws, and in one sentence why. */
   onRenderer?(kind: RendererKind, reason: string): void
-  /** Once for every drawn angle: update DOM by reference here, never state. */
+  /** Once, when the engine is seen to move; where its clock stands, when it is seen. */
+  onSeen?(): void
+  /** Once for every drawn angle: update DOM by reference here, never state. Told by the details. */
   onTick?(instant: Instant): void
 }
 
@@ -67,8 +87,58 @@ export interface StageOptions {
   motion: boolean
 }
 
+/**
+ * Everything over and around the moving parts: forces, marks, words, what hands do. A stage moves without it, so that a
+ * page can show an engine running before it has fetched the rest.
+ */
+export interface Details {
+  /** Another model or look. */
+  stand(picture: Picture, look: StageLook): void
+  /** The sheet has another size, or the eye is going elsewhere. */
+  resize(): void
+  /** At the start of a frame. */
+  tick(): void
+  /** The crank has turned: fills what the frame shows beside the pose. */
+  turn(angle: number): void
+  /** The picture is on the sheet: paint and write over it. */
+  finish(still: boolean): void
+  retheme(palette: Palette): void
+  dispose(): void
+}
+
+/** What a stage lets its details see and do. */
+export interface Hold {
+  host: HTMLElement
+  clock: Clock
+  events: StageEvents
+  /** A pane: no labels, no balloons, no pointer. */
+  pane: boolean
+  eye: Eye
+  sheet: SheetSize
+  readonly palette: Palette
+  /** Draw again. */
+  touch(): void
+  /** A frame, if only to look. */
+  wake(): void
+  /** By hand. */
+  move(camera: Camera): void
+  /** The hand has let go. */
+  moved(): void
+  view(name: NamedView): void
+}
+
+/** CSS pixels and how many of the device's go into one. */
+export interface SheetSize {
+  width: number
+  height: number
+  ratio: number
+}
+
+export type CreateDetails = (hold: Hold) => Details
+
 export interface Stage {
-  setModel(model: StageModel): void
+  /** A model without forces can only move. */
+  setModel(model: MovingModel | StageModel): void
   setLook(look: StageLook): void
   /** Null frames the whole engine. */
   setCamera(camera: Camera | null): void
@@ -77,6 +147,8 @@ export interface Stage {
   setRenderer(kind: RendererKind | 'auto'): void
   /** Colours have changed (theme). */
   retheme(): void
+  /** Brings the details in, once. */
+  enrich(createDetails: CreateDetails): void
   dispose(): void
 }
 

@@ -1,11 +1,11 @@
 import { project } from '@/scene/frame/camera'
 import { HIDDEN } from '@/scene/frame/types'
 import type { Labels, LabelSheet, LabelSpec } from './labels'
-import type { Picture } from './picture'
+import type { ForcedPicture } from './forced-picture'
 import type { StageLook } from './types'
 
 /** What is written on the drawing, in the order of who gives way to whom: picked part, firings, cylinders, banks, ends, throws. */
-export function listWords({ model, rig }: Picture, look: StageLook): LabelSpec[] {
+export function listWords({ model, rig }: ForcedPicture, look: StageLook): LabelSpec[] {
   const { cylinders, throws, banks } = model.plan.train
   const lit = rig.parts.find((part) => part.id === look.lit[0])
   return [
@@ -31,7 +31,7 @@ const mostBanks = 4
 const beyondLabels = 1.14
 
 /** Puts every word where its point is on the sheet. Allocates nothing. */
-export function placeWords(labels: Labels, picture: Picture, sheet: WordSheet): void {
+export function placeWords(labels: Labels, picture: ForcedPicture, sheet: WordSheet): void {
   const { cylinders, throws, banks } = picture.model.plan.train
   const { overlays } = sheet.look
   labels.begin(sheet)
@@ -61,7 +61,7 @@ export function placeWords(labels: Labels, picture: Picture, sheet: WordSheet): 
   labels.end()
 }
 
-function placeLit(labels: Labels, picture: Picture, sheet: WordSheet) {
+function placeLit(labels: Labels, picture: ForcedPicture, sheet: WordSheet) {
   const { rig, visibility } = picture
   for (let part = 0; part < rig.parts.length; part++) {
     if (rig.parts[part].id !== sheet.look.lit[0] || visibility[part] === HIDDEN) continue
@@ -79,7 +79,7 @@ function placeLit(labels: Labels, picture: Picture, sheet: WordSheet) {
   }
 }
 
-function placeFirings(labels: Labels, from: number, picture: Picture, sheet: WordSheet) {
+function placeFirings(labels: Labels, from: number, picture: ForcedPicture, sheet: WordSheet) {
   const { model, markers, rig } = picture
   for (let i = 0; i < model.events.length; i++) {
     const { cylinder } = model.events[i]
@@ -96,7 +96,7 @@ function put(
   index: number,
   at: readonly number[],
   out: number,
-  { frame }: Picture,
+  { frame }: ForcedPicture,
   sheet: WordSheet,
 ) {
   if (project(spot, frame.viewProjection, at[0] * out, at[1] * out, at[2], sheet.width, sheet.height))
@@ -111,7 +111,7 @@ function putOn(
   x: number,
   y: number,
   z: number,
-  picture: Picture,
+  picture: ForcedPicture,
   sheet: WordSheet,
 ) {
   const { pose, frame } = picture

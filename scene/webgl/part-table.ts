@@ -1,6 +1,6 @@
 import { DataTexture, FloatType, NearestFilter, RGBAFormat } from 'three'
+import { fillFar, placeBanks } from '@/scene/frame/banks'
 import { GHOST, type Frame, type Part, type Rig, type Visibility } from '@/scene/frame/types'
-import { fillFar, placeBanks } from './banks'
 
 /**
  * What the shaders must know of each part, a column a part in one small float texture, so that a frame is one upload:
@@ -26,7 +26,7 @@ export function createPartTable(rig: Rig): PartTable {
   const data = new Float32Array(4 * rows * count)
   const texture = new DataTexture(data, count, rows, RGBAFormat, FloatType)
   texture.minFilter = texture.magFilter = NearestFilter
-  const banks = placeBanks(rig)
+  const banks = placeBanks(rig.parts, rig.anchors.firing)
   const style = 4 * count
   const surface = 8 * count
   const hatch = 12 * count

@@ -1,18 +1,13 @@
-import type { Metadata } from 'next'
+import { notFound } from 'next/navigation'
 import { SharedSheet } from '@/components/sharing/shared-sheet'
-import { UnavailableSheet } from '@/components/sharing/unavailable-sheet'
 import { Problem } from '@/lib/errors/problem'
 import { openShareLink } from '@/lib/services/open-share-link'
 import { summaryOf } from '@/scene/model/summary'
+import { linkMetadata } from './link-metadata'
 
 export const dynamic = 'force-dynamic'
 
-/** The address is a secret: it is neither indexed nor told to anybody who is linked from here. */
-export const metadata: Metadata = {
-  title: 'Shared scene',
-  referrer: 'no-referrer',
-  robots: { index: false, follow: false },
-}
+export const metadata = linkMetadata
 
 /** Null for unknown, ended and withdrawn alike. */
 async function opened(token: string) {
@@ -27,11 +22,11 @@ async function opened(token: string) {
 export default async function SharedPage({ params }: PageProps<'/s/[token]'>) {
   const { token } = await params
   const shared = await opened(token)
-  if (!shared) return <UnavailableSheet />
+  if (!shared) notFound()
   return (
     <SharedSheet
       shared={shared}
-      poster={`/api/v1/shared/${encodeURIComponent(token)}/poster.png`}
+      base={`/api/v1/shared/${encodeURIComponent(token)}`}
       summary={summaryOf(shared.document)}
     />
   )

@@ -1,6 +1,5 @@
-import { hatchRow } from './hatch'
 import { JITTER_X, JITTER_Y } from './view'
-import type { Raster } from './types'
+import type { Fine, Raster } from './types'
 
 /** Makes picture coordinates positive, so that cutting off the fraction rounds down. */
 const whole = 1 << 20
@@ -10,9 +9,15 @@ const bias = whole + 1
  * Fills the listed faces from…to into a depth buffer (nearest greatest). A pixel belongs to the face its centre
  * lies in; the ends of a row are found from the upper vertex of each side, so that two faces that share a side
  * share every rounding too: no gap, no overlap. Depth, surface and tone are one number: one compare, one store.
- * With `hatching`, nothing is filled: the rows of cut faces are hatched where they show.
+ * With `hatchRow`, nothing is filled: the rows of cut faces are hatched where they show.
  */
-export function fillFaces(raster: Raster, pixels: Int32Array, from: number, to: number, hatching: boolean) {
+export function fillFaces(
+  raster: Raster,
+  pixels: Int32Array,
+  from: number,
+  to: number,
+  hatchRow: Fine['hatchRow'] | null,
+) {
   const { view, flat, width, height } = raster
   const { surfaceCut } = flat
   const { x, y, z, corners, codes, lens } = view
@@ -21,7 +26,7 @@ export function fillFaces(raster: Raster, pixels: Int32Array, from: number, to: 
   const jitterY = lens[JITTER_Y] - 0.5
   for (let face = from; face < to; face++) {
     const code = codes[face]
-    if (hatching && surfaceCut[code >> 1] === 0) continue
+    if (hatchRow && surfaceCut[code >> 1] === 0) continue
     let top = corners[face * 3]
     let mid = corners[face * 3 + 1]
     let low = corners[face * 3 + 2]
@@ -83,7 +88,7 @@ export function fillFaces(raster: Raster, pixels: Int32Array, from: number, to: 
         if (left < 0) left = 0
         if (right > width) right = width
         if (left < right) {
-          if (hatching) hatchRow(raster, code >> 1, row, left, right)
+          if (hatchRow) hatchRow(raster, code >> 1, row, left, right)
           else {
             let depth = (rowZ + left * perX) | 0
             const last = base + right

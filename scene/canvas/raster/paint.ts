@@ -1,29 +1,29 @@
 import { compose } from './compose'
 import { fillFaces } from './faces'
-import { hangHatch } from './hatch'
 import { inkLines } from './lines'
 import { fillPalette } from './palette'
 import { projectParts } from './project'
-import { inkSeams } from './seams'
 import { outlineHalf } from '@/scene/frame/manner'
 import { fillView, JITTER_X, JITTER_Y } from './view'
 import type { Raster, RasterFrame, View } from './types'
 
 /** Draws one picture into `raster.image`; what changed of it is `raster.dirty`. */
 export function paint(raster: Raster, frame: RasterFrame) {
-  const { view } = raster
+  const { view, fine } = raster
   fillView(raster, frame)
   moveBoxes(raster)
   clear(raster.pixels, raster, raster.dirty)
   clear(raster.ink, raster, raster.dirty)
   projectParts(raster)
   view.lens[JITTER_X] = view.lens[JITTER_Y] = 0
-  fillFaces(raster, raster.pixels, 0, view.solidFaces, false)
+  fillFaces(raster, raster.pixels, 0, view.solidFaces, null)
   fillGhosts(raster)
   inkLines(raster)
-  inkSeams(raster)
-  hangHatch(raster)
-  fillFaces(raster, raster.pixels, 0, view.solidFaces, true)
+  if (fine) {
+    fine.inkSeams(raster)
+    fine.hangHatch(raster)
+    fillFaces(raster, raster.pixels, 0, view.solidFaces, fine.hatchRow)
+  }
   fillPalette(raster, frame)
   compose(raster)
 }
@@ -33,7 +33,7 @@ function fillGhosts(raster: Raster) {
   if (view.ghostCount === 0) return
   if (raster.ghostPixels.length !== pixels.length) raster.ghostPixels = new Int32Array(pixels.length)
   else raster.ghostPixels.fill(0)
-  fillFaces(raster, raster.ghostPixels, view.solidFaces, view.faces, false)
+  fillFaces(raster, raster.ghostPixels, view.solidFaces, view.faces, null)
 }
 
 /** The dirty box is the last picture's united with this one's; the whole picture after new colours or a new size. */

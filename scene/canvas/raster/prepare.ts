@@ -1,3 +1,4 @@
+import { placeBanks, type Banks } from '@/scene/frame/banks'
 import type { Rig } from '@/scene/frame/types'
 
 /** What the raster needs of a rig: may be sent to a worker. */
@@ -46,9 +47,7 @@ export interface FlatRig {
   surfaceCut: Uint8Array
   surfaceFill: Uint8Array // 0 part, 1 metal, 2 crown
 
-  /** Mean firing point of each bank, and how far those points stand from the crank axis. */
-  bankPoint: Float64Array
-  bankReach: number
+  banks: Banks
 }
 
 const fills = { part: 0, metal: 1, crown: 2 } as const
@@ -139,7 +138,8 @@ export function flattenRig(rig: RigShape): FlatRig {
     surfaceWidth,
     surfaceCut,
     surfaceFill,
-    ...placeBanks(rig),
+    cylinderCount: rig.anchors.firing.length,
+    banks: placeBanks(parts, rig.anchors.firing),
   }
 }
 
@@ -161,21 +161,4 @@ function measureFaces(
       for (let k = 0; k < 3; k++) offsets[face] += normals[face * 3 + k] * positions[a + k]
     }
   return { offsets, areas }
-}
-
-function placeBanks({ parts, anchors }: RigShape) {
-  const bankOf = new Map<number, number>()
-  for (const part of parts) if (part.cylinder >= 0 && part.bank >= 0) bankOf.set(part.cylinder, part.bank)
-  const bankCount = Math.max(0, ...[...bankOf.values()].map((bank) => bank + 1))
-  const bankPoint = new Float64Array(bankCount * 3)
-  const members = new Int32Array(bankCount)
-  let bankReach = 0
-  for (const [cylinder, bank] of bankOf) {
-    const point = anchors.firing[cylinder]
-    for (let k = 0; k < 3; k++) bankPoint[bank * 3 + k] += point[k]
-    members[bank]++
-    bankReach += Math.hypot(point[0], point[1]) / bankOf.size
-  }
-  for (let i = 0; i < bankPoint.length; i++) bankPoint[i] /= members[Math.floor(i / 3)] || 1
-  return { cylinderCount: anchors.firing.length, bankPoint, bankReach }
 }

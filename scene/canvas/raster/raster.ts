@@ -2,12 +2,13 @@ import { SHOWN, type InkTheme, type Visibility } from '@/scene/frame/types'
 import { createPalette, loadTheme } from './palette'
 import { flattenRig, type RigShape } from './prepare'
 import { createRuns } from './runs'
-import type { Raster } from './types'
+import type { Fine, Raster } from './types'
 import { createView } from './view'
 
-export function createRaster(rig: RigShape, theme: InkTheme): Raster {
+export function createRaster(rig: RigShape, theme: InkTheme, fine: Fine | null): Raster {
   const raster: Raster = {
     ...rigBuffers(rig),
+    fine,
     width: 0,
     height: 0,
     scale: 1,

@@ -29,7 +29,7 @@ export function addSample(raster: Raster, sample: number) {
   clear(pixels, raster, drawn)
   view.lens[JITTER_X] = 0.5 - (places[sample * 2] + 0.5) / 16
   view.lens[JITTER_Y] = 0.5 - (places[sample * 2 + 1] + 0.5) / 16
-  fillFaces(raster, pixels, 0, view.solidFaces, false)
+  fillFaces(raster, pixels, 0, view.solidFaces, null)
   const { colours, fillOf } = palette
   const codeMask = (1 << (flat.surfaceBits + 1)) - 1
   for (let y = drawn[1]; y < drawn[3]; y++)

@@ -8,6 +8,8 @@ export interface Raster {
   runs: Runs
   palette: Palette
   visibility: Visibility
+  /** Seams, hatch and refinement, once they are there. */
+  fine: Fine | null
   width: number
   height: number
   /** Picture pixels a CSS pixel: line widths and hatch grow with it. */
@@ -29,6 +31,17 @@ export interface Raster {
   /** Still picture: sums of samples, made when the first is refined. */
   sumRedBlue: Uint32Array
   sumGreen: Uint32Array
+}
+
+/** What makes a picture fine (./fine); an engine can be seen to move before it is there. */
+export interface Fine {
+  inkSeams(raster: Raster): void
+  hangHatch(raster: Raster): void
+  hatchRow(raster: Raster, surface: number, y: number, left: number, right: number): void
+  addSample(raster: Raster, sample: number): void
+  showSamples(raster: Raster, samples: number): void
+  firstSamples: number
+  allSamples: number
 }
 
 export interface RasterFrame {

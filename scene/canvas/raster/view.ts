@@ -1,3 +1,4 @@
+import { fillFar } from '@/scene/frame/banks'
 import { GHOST, HIDDEN } from '@/scene/frame/types'
 import type { FlatRig } from './prepare'
 import { light } from '@/scene/frame/manner'
@@ -89,7 +90,7 @@ export function fillView(raster: Raster, frame: RasterFrame) {
   lens[DEPTH_SCALE] = nearest > 0 ? depthRange / (span * (1 + 2 * depthMargin)) : 0
   lens[LEAN] = lens[FOCAL] > 0 ? (lens[DEPTH_SCALE] * (nearest + farthest)) / 2 / lens[FOCAL] : 0
   sortNearestFirst(view.solids, view.solidCount, view.middle)
-  fillFar(raster, frame)
+  placeFar(raster, frame)
 }
 
 function placePart({ view, width, height }: Raster, frame: RasterFrame, part: number) {
@@ -198,19 +199,10 @@ function sortNearestFirst(list: Int32Array, count: number, key: Float64Array) {
   }
 }
 
-/** A bank whose firing points stand well behind the nearest bank's is the far one; in between it changes smoothly. */
-function fillFar({ flat, view }: Raster, frame: RasterFrame) {
-  const m = frame.viewProjection
-  const { bankPoint, bankReach } = flat
-  let nearest = Infinity
-  for (let i = 0; i < bankPoint.length; i += 3)
-    nearest = Math.min(nearest, m[3] * bankPoint[i] + m[7] * bankPoint[i + 1] + m[11] * bankPoint[i + 2])
-  for (let part = 0; part < flat.partCount; part++) {
-    const i = flat.partBank[part] * 3
-    view.far[part] = 0
-    if (i < 0) continue
-    const w = m[3] * bankPoint[i] + m[7] * bankPoint[i + 1] + m[11] * bankPoint[i + 2]
-    const share = Math.min(1, Math.max(0, ((w - nearest) / bankReach - 0.2) / 0.4))
-    view.far[part] = share * share * (3 - 2 * share)
-  }
+/** The parts of a bank stand as far back as it does. */
+function placeFar({ flat, view }: Raster, frame: RasterFrame) {
+  const { banks, partBank, partCount } = flat
+  fillFar(banks, frame.viewProjection)
+  for (let part = 0; part < partCount; part++)
+    view.far[part] = partBank[part] < 0 ? 0 : banks.far[partBank[part]]
 }

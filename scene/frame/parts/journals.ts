@@ -13,7 +13,7 @@ export function addJournals({ parts, train, shape, layout }: Room) {
   layout.journals.forEach(({ from, to, main }, i) => {
     const name = main >= 0 ? train.mains[main].id : i === 0 ? 'free' : 'drive'
     const label = main >= 0 ? `Main journal ${name}` : i === 0 ? 'Free-end stub' : 'Drive-end stub'
-    const mesh = bar(parts, shape.mainRadius, 0, from, to)
+    const mesh = bar(parts, { radius: shape.mainRadius, bore: shape.mainBore }, 0, from, to)
     parts.add({ ...crankPart, id: `main-journal:${name}`, kind: 'main-journal', label }, mesh)
     if (main < 0) return
     const half = (BEARING / 2) * Math.min(shape.mainLength, to - from)
@@ -42,19 +42,30 @@ export function addPins({ parts, train, shape, layout }: Room): number[] {
     const { id, radius, angle } = train.throws[index]
     pins[index] = parts.add(
       { ...crankPart, id: `crank-pin:${id}`, kind: 'crank-pin', throw: index, label: `Crank pin ${id}` },
-      bar(parts, shape.pinRadius, radius, from, to),
+      bar(parts, { radius: shape.pinRadius, bore: shape.pinBore }, radius, from, to),
       { phase: angle },
     )
   }
   return pins
 }
 
-/** A round bar along the crank, `offset` from the axis along its throw. */
-function bar(parts: Room['parts'], radius: number, offset: number, from: number, to: number): number {
+interface Round {
+  radius: number
+  bore: number
+}
+
+/** A round bar along the crank, bored through or solid, `offset` from the axis along its throw. */
+function bar(
+  parts: Room['parts'],
+  { radius, bore }: Round,
+  offset: number,
+  from: number,
+  to: number,
+): number {
   const half = (to - from) / 2
-  return parts.mesh(`bar ${radius} ${offset} ${half}`, (from + to) / 2, (builder) =>
+  return parts.mesh(`bar ${radius} ${bore} ${offset} ${half}`, (from + to) / 2, (builder) =>
     addLathe(builder, {
-      profile: tubeProfile(0, radius, -half, half),
+      profile: tubeProfile(bore, radius, -half, half),
       axis: 'z',
       at: [0, offset],
       steps: STEPS,

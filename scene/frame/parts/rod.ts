@@ -80,15 +80,34 @@ function beamStart(size: RodSize): number {
   return size.bigEnds.length > 1 ? 1.28 * size.bigRadius : size.bigRadius
 }
 
-function addBeam(builder: MeshBuilder, size: RodSize) {
+/** Where the beam leaves its two eyes; null where they meet and there is no beam. */
+function beamEnds(size: RodSize) {
   const low = INSIDE * beamStart(size)
   const high = INSIDE * size.smallRadius
   const room = size.length - low - high
-  if (room <= 0) return
+  if (room <= 0) return null
   const lowAngle = Math.acos(Math.min(beamHalfWidth(size, 0) / low, 0.95))
   const highAngle = Math.acos(Math.min(beamHalfWidth(size, 1) / high, 0.95))
   const bottom = low * Math.sin(lowAngle)
   const top = size.length - high * Math.sin(highAngle)
+  return { low, high, room, lowAngle, highAngle, bottom, top }
+}
+
+/** Half the drawn beam's width at places along the rod from its big end. */
+export function shankOf(size: RodSize): { along: number; half: number }[] {
+  const ends = beamEnds(size)
+  if (!ends) return []
+  const { bottom, top } = ends
+  return Array.from({ length: BEAM_STEPS + 1 }, (_, i) => {
+    const t = i / BEAM_STEPS
+    return { along: bottom + (top - bottom) * t, half: beamHalfWidth(size, t) }
+  })
+}
+
+function addBeam(builder: MeshBuilder, size: RodSize) {
+  const ends = beamEnds(size)
+  if (!ends) return
+  const { low, high, room, lowAngle, highAngle, bottom, top } = ends
   const side = (from: number, to: number, inset: number, first: number, last: number): Outline => {
     const points: Outline = []
     for (let i = first; i <= last; i++) {

@@ -1,5 +1,6 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
+import { fine } from '@/scene/canvas/raster/fine'
 import { paint } from '@/scene/canvas/raster/paint'
 import { createRaster, setSize, setTheme, setVisibility } from '@/scene/canvas/raster/raster'
 import { addSample, showSamples } from '@/scene/canvas/raster/refine'
@@ -27,7 +28,7 @@ describe('paint(raster, frame): dirty box', () => {
   it('leaves the sheet as a fresh full picture would, after any frames, sizes, colours and parts', () => {
     fc.assert(
       fc.property(fc.array(step, { minLength: 1, maxLength: 6 }), (steps) => {
-        const raster = createRaster(rig, vellum)
+        const raster = createRaster(rig, vellum, fine)
         let sheet = new Uint32Array(0)
         for (const { motions, visibility, distance, tint, dark, width, still } of steps) {
           if (raster.palette.theme.paper !== (dark ? slate : vellum).paper)
@@ -47,7 +48,7 @@ describe('paint(raster, frame): dirty box', () => {
             showSamples(raster, 3)
             put(sheet, raster.image, raster.drawn, width)
           }
-          const fresh = createRaster(rig, dark ? slate : vellum)
+          const fresh = createRaster(rig, dark ? slate : vellum, fine)
           setVisibility(fresh, Uint8Array.from(visibility))
           setSize(fresh, width, 80, 1)
           paint(fresh, frame)
@@ -63,7 +64,7 @@ describe('paint(raster, frame): dirty box', () => {
   })
 
   it('is small where little is drawn, and the whole sheet after new colours', () => {
-    const raster = createRaster(rig, vellum)
+    const raster = createRaster(rig, vellum, fine)
     setVisibility(raster, Uint8Array.of(1, 0, 0))
     setSize(raster, 400, 300, 1)
     const frame = frameOf(poseOf({}, {}, {}), { eye: [0, 0, -10], fov: 0.6, aspect: 4 / 3 })

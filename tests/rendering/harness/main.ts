@@ -4,7 +4,9 @@ import type { StageLook } from '@/scene/stage/types'
 import { toTrain } from '@/scene/model/to-train'
 import { createClock } from '@/scene/session/clock'
 import { buildStageModel } from '@/scene/stage/build-stage-model'
+import { createDetails } from '@/scene/stage/create-details'
 import { createStage } from '@/scene/stage/create-stage'
+import { cutRig } from '@/scene/stage/cut-rig'
 import type { NamedView, RendererKind } from '@/scene/stage/types'
 
 /** A page with nothing but a stage, steered by its address and by `window.harness`. */
@@ -13,13 +15,13 @@ async function readModel(preset: string, rpm: number) {
   const { default: json } = await import(`../../../scene/model/presets/${preset}.json`)
   const document = crankTrainSchema.parse(json)
   const train = toTrain(document)
-  return buildStageModel(document, train, (rpm * 2 * Math.PI) / 60)
+  const model = buildStageModel(document, train, (rpm * 2 * Math.PI) / 60)
+  return { ...model, rig: cutRig(model.rig, ask.has('section') ? Number(ask.get('section')) : null) }
 }
 
 const look: StageLook = {
   hidden: [],
   ghost: [],
-  sectionAxial: null,
   overlays: {
     gas: false,
     inertia: false,
@@ -61,11 +63,16 @@ const mount = (element: HTMLElement, pane?: NamedView) => {
       onBalloon: tell('balloon'),
       onCamera: tell('camera'),
       onRenderer: tell('renderer'),
+      onSeen: () => tell('seen')(true),
       onTick: () => void ticks.count++,
     },
     { renderer: (ask.get('renderer') ?? 'auto') as RendererKind | 'auto', pane, motion: ask.has('motion') },
   )
-  stage.setModel(model)
+  if (ask.has('bare')) stage.setModel({ rig: model.rig })
+  else {
+    stage.enrich(createDetails)
+    stage.setModel(model)
+  }
   const wished = JSON.parse(ask.get('look') ?? '{}')
   stage.setLook({ ...look, ...wished, overlays: { ...look.overlays, ...wished.overlays } })
   return stage
@@ -75,6 +82,11 @@ const stage = mount(host)
 const view = ask.get('view')
 if (view) stage.view(view as NamedView)
 
-const harness = { stage, clock, events, ticks, model, look, mount, readModel, host }
+const enrich = () => {
+  stage.enrich(createDetails)
+  stage.setModel(model)
+}
+
+const harness = { stage, enrich, clock, events, ticks, model, look, mount, readModel, host }
 export type Harness = typeof harness
 Object.assign(window, { harness })

@@ -167,3 +167,35 @@ test('a hundred stages that came and went leave nothing behind', async ({ open }
   })
   expect(left).toEqual({ children: 0, attributes: [], canvases: 2 })
 })
+
+test('a stage moves before its details are there, says so once, and takes them on while it runs', async ({
+  open,
+}) => {
+  const page = await open({ ...canvas, bare: '', look: JSON.stringify({ overlays: { labels: true } }) })
+  const labels = page.locator('.stage-label:visible')
+  const marks = () => page.evaluate(() => performance.getEntriesByName('moving').length)
+  const shown = () => page.locator('#host').getAttribute('data-angle')
+  expect(await marks()).toBe(0)
+  expect(await page.evaluate(() => window.harness.events.filter(({ name }) => name === 'seen').length)).toBe(
+    1,
+  )
+  await page.evaluate(() => {
+    window.harness.clock.setRate(1)
+    window.harness.clock.play()
+  })
+  await expect.poll(shown).not.toBe('0.00')
+  expect(await marks()).toBe(1)
+  await expect(labels).toHaveCount(0)
+  expect(await page.evaluate(() => window.harness.ticks.count)).toBe(0)
+
+  await page.evaluate(() => window.harness.enrich())
+  await expect(labels.first()).toBeVisible()
+  await page.evaluate(() => window.harness.clock.pause())
+  await still(page)
+  await page.locator('#host').focus()
+  const angle = () => page.evaluate(() => window.harness.clock.angle)
+  const before = await angle()
+  await page.keyboard.press(']')
+  expect((await angle()) - before).toBeCloseTo(Math.PI / 180, 9)
+  expect(await page.evaluate(() => window.harness.ticks.count)).toBeGreaterThan(0)
+})

@@ -31,9 +31,10 @@ test('the comparison sees four degrees of crank angle', async ({ open }) => {
 })
 
 test('hidden, ghost and cut engines are one picture too', async ({ open }) => {
-  const look = JSON.stringify({ hidden: ['bores'], ghost: ['pistons'], sectionAxial: 0.1 })
-  const webgl = await picture(await open({ preset: 'v8x-5000', look, size, renderer: 'webgl' }))
-  const canvas = await picture(await open({ preset: 'v8x-5000', look, size, renderer: 'canvas' }))
+  const look = JSON.stringify({ hidden: ['bores'], ghost: ['pistons'] })
+  const cut = { preset: 'v8x-5000', look, size, section: '0.1' }
+  const webgl = await picture(await open({ ...cut, renderer: 'webgl' }))
+  const canvas = await picture(await open({ ...cut, renderer: 'canvas' }))
   const difference = await edgeDifference(webgl, canvas)
   console.log(`hidden, ghost, cut: edge difference ${difference.toFixed(3)}`)
   expect(difference).toBeLessThan(bound)

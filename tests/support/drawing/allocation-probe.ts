@@ -1,4 +1,5 @@
 import document from '@/scene/model/presets/v8x-5000.json'
+import { fine } from '@/scene/canvas/raster/fine'
 import { paint } from '@/scene/canvas/raster/paint'
 import { createRaster, setSize } from '@/scene/canvas/raster/raster'
 import { buildRig } from '@/scene/frame/build-rig'
@@ -14,7 +15,7 @@ import type { RasterFrame } from '@/scene/canvas/raster/types'
 
 const train = crankTrainSchema.parse(document)
 const rig = buildRig(train, toTrain(train))
-const raster = createRaster(rig, vellum)
+const raster = createRaster(rig, vellum, fine)
 setSize(raster, 320, 180, 0.5)
 const frame: RasterFrame = {
   pose: buildPose(rig),

@@ -1,3 +1,4 @@
+import { fine } from '@/scene/canvas/raster/fine'
 import { paint } from '@/scene/canvas/raster/paint'
 import type { RigShape } from '@/scene/canvas/raster/prepare'
 import { createRaster, setSize, setVisibility } from '@/scene/canvas/raster/raster'
@@ -16,7 +17,7 @@ export interface Sheet {
 /** One picture in a fresh raster. */
 export function drawn(rig: RigShape, frame: RasterFrame, sheet: Sheet = {}): Raster {
   const { theme = vellum, visibility, width = 200, height = 200, scale = 1 } = sheet
-  const raster = createRaster(rig, theme)
+  const raster = createRaster(rig, theme, fine)
   if (visibility) setVisibility(raster, Uint8Array.from(visibility))
   setSize(raster, width, height, scale)
   paint(raster, frame)

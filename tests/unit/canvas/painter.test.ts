@@ -1,12 +1,14 @@
 import { describe, expect, it } from 'vitest'
 import { createPainter } from '@/scene/canvas/painter'
+import { fine } from '@/scene/canvas/raster/fine'
+import type { Fine } from '@/scene/canvas/raster/types'
 import { boxMesh, frameOf, poseOf, rigOf, slate, vellum } from '@/tests/support/drawing/small-rig'
 
 const rig = rigOf([{ mesh: boxMesh(1, 1, 1) }])
 const frame = (turn: number) => frameOf(poseOf({ turn }), { eye: [3, 3, -9], fov: 0.3, aspect: 4 / 3 })
 
 /** A sheet that keeps what was put on it, and a queue that runs when told. */
-function bench(cost = 1) {
+function bench(cost = 1, start: Fine | null = fine) {
   let time = 0
   const waiting: (() => void)[] = []
   const puts: { box: number[]; image: Uint32Array }[] = []
@@ -16,7 +18,8 @@ function bench(cost = 1) {
     put: (image: Uint32Array<ArrayBuffer>, box: Int32Array) =>
       void puts.push({ box: [...box], image: image.slice() }),
   }
-  const painter = createPainter(sheet, { now: () => (time += cost), soon: (step) => void waiting.push(step) })
+  const pacing = { now: () => (time += cost), soon: (step: () => void) => void waiting.push(step) }
+  const painter = createPainter(sheet, pacing, start)
   const run = (steps = Infinity) => {
     for (let i = 0; i < steps && waiting.length; i++) waiting.shift()?.()
   }
@@ -62,6 +65,23 @@ describe('createPainter(sheet, pacing)', () => {
     two.painter.draw(frame(0.2), true)
     two.run()
     expect(two.puts[two.puts.length - 1].image).toEqual(one.puts[2].image)
+  })
+
+  it('paints plainly until it is enriched, then at once as if it had always been', () => {
+    const { painter, puts, run } = bench(1, null)
+    painter.setTheme(vellum)
+    painter.setRig(rig)
+    painter.resize(160, 120, 1)
+    painter.draw(frame(0.2), true)
+    run()
+    expect(puts).toHaveLength(1)
+    painter.enrich(fine)
+    run()
+    const always = set()
+    always.painter.draw(frame(0.2), true)
+    always.run()
+    expect(puts).toHaveLength(4)
+    expect(puts[3].image).toEqual(always.puts[2].image)
   })
 
   it('gives the refinement up at the next frame', () => {

@@ -40,7 +40,7 @@ describe('flattenRig(rig)', () => {
   it('puts a bank where the firing points of its cylinders are', () => {
     const part = (bank: number, cylinder: number) => ({ mesh, part: { bank, cylinder } })
     const placed = flattenRig(rigOf([part(0, 0), part(1, 1), part(1, 2)], [[0, 3, 0], [4, 3, 1], [4, 3, 3]])) // prettier-ignore
-    expect([...placed.bankPoint]).toEqual([0, 3, 0, 4, 3, 2])
-    expect(placed.bankReach).toBeCloseTo((3 + 5 + 5) / 3, 9)
+    expect([...placed.banks.points]).toEqual([0, 3, 0, 4, 3, 2])
+    expect(placed.banks.reach).toBeCloseTo((3 + 5 + 5) / 3, 9)
   })
 })

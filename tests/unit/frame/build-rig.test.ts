@@ -4,7 +4,7 @@ import { counterweightSector, rimSector, sectorOutline } from '@/scene/frame/par
 import { STEEL } from '@/scene/frame/shape'
 import { buildPose, fillPose } from '@/scene/frame/pose'
 import { buildRig } from '@/scene/frame/build-rig'
-import type { Mesh } from '@/scene/frame/types'
+import type { Mesh, Rig } from '@/scene/frame/types'
 import { built, measured, openEdges, presetRig, presetRigs, randomRigs, solidsOf } from './rigs'
 
 const triangles = (id: string) => {
@@ -26,6 +26,20 @@ describe('buildRig(document, train)', () => {
       expect(rig.anchors.throwLabel.every(({ part }) => rig.parts[part].kind === 'crank-pin')).toBe(true)
     })
   }
+
+  it('bores pins and mains through where the document says so, and never to nothing', () => {
+    const { document } = presetRig('i3-1000')
+    const shape = { ...document.shape, pinDiaMm: 40, pinBoreMm: 20, mainDiaMm: 48, mainBoreMm: 60 }
+    const meshOf = (rig: Rig, id: string) => rig.meshes[rig.parts.find((part) => part.id === id)!.mesh]
+    const throwId = document.throws[0].id
+    const mainId = document.mains[0].id
+    const solid = built('solid', { ...document, shape: { ...shape, pinBoreMm: 0, mainBoreMm: 0 } }).rig
+    const hollow = built('hollow', { ...document, shape }).rig
+    const share = (id: string) => measured(meshOf(hollow, id)).volume / measured(meshOf(solid, id)).volume
+    expect(share(`crank-pin:${throwId}`)).toBeCloseTo(1 - (20 / 40) ** 2, 6)
+    expect(share(`main-journal:${mainId}`)).toBeCloseTo(1 - 0.95 ** 2, 6)
+    expect(openEdges(meshOf(hollow, `crank-pin:${throwId}`))).toBe(0)
+  })
 
   it('names every part once, by kind and the document’s own id', () => {
     for (const { rig, train } of presetRigs()) {

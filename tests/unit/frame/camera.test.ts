@@ -1,17 +1,8 @@
 import { describe, expect, it } from 'vitest'
-import {
-  directionOf,
-  fillViewProjection,
-  frameCamera,
-  keptOutside,
-  namedCamera,
-  namedViews,
-  orbit,
-  pan,
-  project,
-  zoom,
-} from '@/scene/frame/camera'
+import { directionOf, fillViewProjection, frameCamera, namedCamera, project } from '@/scene/frame/camera'
+import { keptOutside, orbit, pan, zoom } from '@/scene/frame/camera-moves'
 import { cornersOf, extentOf } from '@/scene/frame/extent'
+import { namedViews } from '@/scene/frame/named-views'
 import { buildRay, fillRay } from '@/scene/frame/picking'
 import { cameraOf, sceneCameraOf } from '@/scene/frame/scene-camera'
 import { presetRig, presetRigs } from './rigs'
@@ -26,7 +17,7 @@ const out = new Float64Array(3)
 
 describe('frameCamera(bounds, aspect, direction), namedCamera(name, rig, aspect)', () => {
   /** How far from the middle towards the edge of the sheet the farthest point lies. */
-  const widest = (matrix: Float64Array, points: readonly number[], aspect: number) => {
+  const widest = (matrix: Float64Array, points: ArrayLike<number>, aspect: number) => {
     let most = 0
     for (let i = 0; i < points.length; i += 3) {
       if (!project(out, matrix, points[i], points[i + 1], points[i + 2], 2 * aspect, 2)) return Infinity

@@ -64,6 +64,34 @@ describe('stateInWords(train, instant, events, system)', () => {
       /^Crank \d+\.\d°\. Cylinder 1 is firing, [\d.]+ kN on its piston\. Cylinder 8 fires next, in 68\.0°\.$/,
     )
   })
+
+  it('never says of one cylinder that it is firing and that it fires next, also where it is lit before its top', () => {
+    const gas = train.gas
+    if (gas.model !== 'heat-release') throw new Error('this preset has a heat release')
+    const early = { ...train, gas: { ...gas, combustionStart: -20 * DEG } }
+    const said = new Set<boolean>()
+    for (let degree = 0; degree < 720; degree += 5) {
+      fillInstant(instant, plan, degree * DEG)
+      const words = stateInWords(early, instant, order, 'si')
+      const firing = [...words.matchAll(/Cylinder (\S+) is firing/g)].map(([, id]) => id)
+      const [, next] = /Cylinder (\S+) fires next/.exec(words) ?? []
+      said.add(firing.length > 0)
+      expect(firing).not.toContain(next)
+      expect(next).toBeDefined()
+    }
+    expect(said.has(true)).toBe(true)
+  })
+
+  it('says of a lone cylinder that it is firing, and only otherwise when it fires next', () => {
+    const single = presetRig('single-450').train
+    const alone = buildPlan(single, 300)
+    const at = buildInstant(alone)
+    const [event] = firingEvents(single)
+    fillInstant(at, alone, event.angle + 20 * DEG)
+    expect(stateInWords(single, at, [event], 'si')).toMatch(/is firing, [\d.]+ k?N on its piston\.$/)
+    fillInstant(at, alone, event.angle + Math.PI)
+    expect(stateInWords(single, at, [event], 'si')).toMatch(/fires next, in \d+\.0°\.$/)
+  })
 })
 
 describe('partFacts(rig, train, id)', () => {

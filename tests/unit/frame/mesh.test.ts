@@ -1,3 +1,4 @@
+import { array, assert, double, integer, property, tuple } from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { addLathe, tubeProfile } from '@/scene/frame/mesh/lathe'
 import { MeshBuilder } from '@/scene/frame/mesh/mesh-builder'
@@ -99,6 +100,50 @@ describe('triangulate(outer, holes)', () => {
     let sum = 0
     for (let i = 0; i < triangles.length; i += 3) sum += area(i)
     expect(sum).toBeCloseTo(9, 12)
+  })
+
+  it('covers any star with round holes: no overlap, every edge of every loop in one triangle', () => {
+    const part = double({ min: 0, max: 1, noNaN: true })
+    assert(
+      property(
+        array(part, { minLength: 7, maxLength: 60 }),
+        array(tuple(part, integer({ min: 3, max: 40 })), { maxLength: 4 }),
+        (reaches, rounds) => {
+          const outer = reaches.flatMap((reach, i) => {
+            const angle = (2 * Math.PI * i) / reaches.length
+            return [(2 + 8 * reach) * Math.cos(angle), (2 + 8 * reach) * Math.sin(angle)]
+          })
+          const holes = rounds.map(([size, steps], i) =>
+            circle(0.7 * Math.cos(1.6 * i), 0.7 * Math.sin(1.6 * i), 0.05 + 0.35 * size, steps),
+          )
+          const loops = [outer, ...holes]
+          const points = loops.flat()
+          const triangles = triangulate(outer, holes)
+          expect(triangles.length / 3).toBe(points.length / 2 + 2 * holes.length - 2)
+          const sides = new Set<string>()
+          let sum = 0
+          for (let i = 0; i < triangles.length; i += 3) {
+            const corners = triangles.slice(i, i + 3)
+            corners.forEach((from, k) => sides.add(`${from}-${corners[(k + 1) % 3]}`))
+            const { area } = areaMoments(corners.flatMap((k) => [points[2 * k], points[2 * k + 1]]))
+            expect(area).toBeGreaterThan(0)
+            sum += area
+          }
+          const area = (loop: number[]) => areaMoments(loop).area
+          expect(sum).toBeCloseTo(area(outer) - holes.reduce((all, hole) => all + area(hole), 0), 9)
+          let first = 0
+          loops.forEach((loop, hole) => {
+            const count = loop.length / 2
+            for (let i = 0; i < count; i++) {
+              const [a, b] = [first + i, first + ((i + 1) % count)]
+              expect(sides.has(hole ? `${b}-${a}` : `${a}-${b}`)).toBe(true)
+            }
+            first += count
+          })
+        },
+      ),
+      { seed: 1, numRuns: 300 },
+    )
   })
 })
 

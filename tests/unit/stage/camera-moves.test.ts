@@ -1,7 +1,8 @@
 import { assert, double, property, record, tuple } from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import type { Camera } from '@/scene/frame/types'
-import { blendCamera, drag, sameCamera, shove, zoomAt } from '@/scene/stage/camera-moves'
+import { blendCamera, sameCamera } from '@/scene/stage/camera-blend'
+import { drag, shove, zoomAt } from '@/scene/stage/camera-moves'
 
 const bounds = Float64Array.of(-0.3, -0.2, 0, 0.3, 0.4, 0.6)
 

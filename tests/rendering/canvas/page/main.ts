@@ -85,6 +85,8 @@ const drawing = {
   async retheme() {
     const made = mount(640, 400, 1)
     const frame = frameAt(0.4, 1.6, 0.5, false)
+    // a still picture first: a moving one is plain until seams and hatch are there
+    await draw(made, frameAt(0.4, 1.6, 1, true))
     await draw(made, frame)
     await becomes(made.canvas, drawPoster(rig, frame.pose, frame, vellum, null, 640, 400, 1))
     made.renderer.setTheme(slate)

@@ -1,4 +1,4 @@
-import type { Rig } from '@/scene/frame/types'
+import type { Anchors, Part } from './types'
 
 /** Where the banks stand, found once for a rig: which is the far one depends on the eye. */
 export interface Banks {
@@ -10,7 +10,7 @@ export interface Banks {
   far: Float64Array
 }
 
-export function placeBanks({ parts, anchors }: Rig): Banks {
+export function placeBanks(parts: readonly Part[], firing: Anchors['firing']): Banks {
   const bankOf = new Map<number, number>()
   for (const part of parts) if (part.cylinder >= 0 && part.bank >= 0) bankOf.set(part.cylinder, part.bank)
   const count = Math.max(0, ...[...bankOf.values()].map((bank) => bank + 1))
@@ -18,7 +18,7 @@ export function placeBanks({ parts, anchors }: Rig): Banks {
   const members = new Int32Array(count)
   let reach = 0
   for (const [cylinder, bank] of bankOf) {
-    const point = anchors.firing[cylinder]
+    const point = firing[cylinder]
     for (let k = 0; k < 3; k++) points[3 * bank + k] += point[k]
     members[bank]++
     reach += Math.hypot(point[0], point[1]) / bankOf.size
