@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { engineClassNames } from './class-ranges'
 
 /**
  * The crank-train document, format "crank-train/1": its shape, in the units its key names state, and how large a
@@ -102,9 +103,21 @@ export const shapeSchema = z
     counterweightRadiusMm: anyLength,
     compressionHeightMm: length,
     skirtBelowPinMm: anyLength,
+    /** Of the block over the crank axis, along every cylinder. */
+    deckHeightMm: length,
     builtUp: z.boolean(),
   })
   .partial()
+
+/** An unusual value that somebody stands by, and why. It holds for this very value; another is asked about again. */
+export const acknowledgedSchema = z.object({
+  code: z.string().min(1).max(40),
+  path: z.string().max(200),
+  value: z.number().optional(),
+  reason: z.string().trim().min(1).max(300),
+  /** When, ISO 8601. */
+  at: z.string().max(40).optional(),
+})
 
 export const crankTrainSchema = z.object({
   format: z.literal('crank-train/1'),
@@ -159,6 +172,9 @@ export const crankTrainSchema = z.object({
     .optional(),
   shape: shapeSchema.optional(),
   referenceAxialMm: place.optional(),
+  /** Whose usual ranges it is held against; guessed where not set. */
+  engineClass: z.enum([...engineClassNames, 'none']).optional(),
+  acknowledged: listOf(acknowledgedSchema).optional(),
 })
 
 /** A document with every default filled in. */

@@ -40,7 +40,7 @@ export function intervalsInWords(intervalsDeg: number[], even: boolean): string 
   )
 }
 
-function layoutInWords(train: Scene['train']): string {
+export function layoutInWords(train: Scene['train']): string {
   const cylinders = train.cylinders.length
   const many = cylinders === 1 ? 'One cylinder' : `${cylinders} cylinders`
   const used = train.banks.filter((bank) => train.cylinders.some((cylinder) => cylinder.bank === bank.id))

@@ -6,17 +6,27 @@ const kernel = [...numbers, 'mechanics']
 const pureRooms = [...kernel, 'model', 'frame']
 
 /** Rooms that run unchanged in a page, a worker and a server: no page, no built-ins, no clock, no chance. */
-export const pure = ['lib/units', 'lib/numerics', 'lib/mechanics', 'scene/model', 'scene/frame']
+export const pure = ['lib/units', 'lib/numerics', 'lib/mechanics', 'lib/sheet', 'scene/model', 'scene/frame']
 
 const react = ['react', 'react-dom']
 const three = ['three', '@react-three/fiber', '@react-three/drei']
 
 export const rooms = {
   units: { folder: 'lib/units', rooms: [], packages: [] },
-  numerics: { folder: 'lib/numerics', rooms: [], packages: [] },
+  numerics: { folder: 'lib/numerics', rooms: [], packages: ['ml-matrix'] },
+  tables: { folder: 'lib/tables', rooms: [], packages: ['papaparse'] },
   mechanics: { folder: 'lib/mechanics', rooms: numbers, packages: [] },
   model: { folder: 'scene/model', rooms: kernel, packages: ['zod'] },
-  frame: { folder: 'scene/frame', rooms: [...kernel, 'model'], packages: ['earcut'] },
+  frame: { folder: 'scene/frame', rooms: [...kernel, 'model'], packages: [] },
+
+  // what is printed, before it has a layout: the sheet and its preview read the same
+  sheet: { folder: 'lib/sheet', rooms: [...pureRooms, 'tables'], packages: [] },
+  // files for others: what a design sheet and a model are written with
+  export: {
+    folder: 'lib/export',
+    rooms: [...pureRooms, 'sheet'],
+    packages: ['pdfkit', '@gltf-transform/core'],
+  },
 
   canvas: { folder: 'scene/canvas', rooms: ['frame'], packages: [] },
   webgl: { folder: 'scene/webgl', rooms: ['frame'], packages: [...react, ...three] },
@@ -27,20 +37,33 @@ export const rooms = {
     packages: ['react', 'zustand'],
   },
 
-  ui: { folder: 'components/ui', rooms: [], packages: [...react, 'next'] },
+  ui: {
+    folder: 'components/ui',
+    rooms: ['tables'],
+    packages: [...react, 'next', 'd3-scale', 'd3-shape'],
+  },
   shell: { folder: 'components/shell', rooms: ['ui'], packages: [...react, 'next'] },
   drawing: {
     folder: 'components/drawing',
-    rooms: [...pureRooms, 'ui', 'stage', 'session', 'clock'],
+    rooms: [...pureRooms, 'ui', 'shell', 'stage', 'session', 'clock'],
     packages: [...react, 'next'],
+  },
+  // figures as every feature shows them: notes, charts over the cycle, leaves of the bench
+  figures: {
+    folder: 'components/figures',
+    rooms: [...pureRooms, 'tables', 'ui', 'session', 'clock', 'contracts', 'errors'],
+    packages: [...react, 'next', 'swr', 'zustand'],
   },
   feature: {
     folder: 'components/*',
     rooms: [
       ...pureRooms,
+      'tables',
+      'sheet',
       'ui',
       'shell',
       'drawing',
+      'figures',
       'stage',
       'session',
       'clock',
@@ -51,7 +74,11 @@ export const rooms = {
     packages: [...react, 'next', 'swr', 'zod', 'zustand'],
   },
 
-  contracts: { folder: 'lib/contracts', rooms: [...pureRooms, 'access'], packages: ['zod', 'zod-openapi'] },
+  contracts: {
+    folder: 'lib/contracts',
+    rooms: [...pureRooms, 'sheet', 'access'],
+    packages: ['zod', 'zod-openapi'],
+  },
   errors: { folder: 'lib/errors', rooms: [], packages: ['zod'] },
   config: { folder: 'lib/config', rooms: [], packages: ['zod', 'server-only'], node: true },
   migrations: { folder: 'drizzle', rooms: [] },
@@ -84,7 +111,18 @@ export const rooms = {
   },
   services: {
     folder: 'lib/services',
-    rooms: [...pureRooms, 'database', 'adapters', 'auth', 'config', 'contracts', 'errors'],
+    rooms: [
+      ...pureRooms,
+      'tables',
+      'sheet',
+      'export',
+      'database',
+      'adapters',
+      'auth',
+      'config',
+      'contracts',
+      'errors',
+    ],
     packages: ['drizzle-orm', 'server-only', 'sharp', 'zod'],
     node: true,
   },
@@ -99,7 +137,20 @@ export const rooms = {
     folder: 'app',
     rooms: [
       ...pureRooms,
-      ...['ui', 'shell', 'drawing', 'feature', 'session', 'clock', 'stage', 'canvas'],
+      ...[
+        'tables',
+        'sheet',
+        'export',
+        'ui',
+        'shell',
+        'drawing',
+        'figures',
+        'feature',
+        'session',
+        'clock',
+        'stage',
+        'canvas',
+      ],
       ...['contracts', 'errors', 'config', 'auth', 'services', 'http', 'adapters'],
     ],
     packages: [...react, 'next', 'server-only', 'swr', 'zod', 'zod-openapi'],

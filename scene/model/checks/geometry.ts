@@ -74,6 +74,7 @@ function rods(document: CrankTrain): Issue[] {
     const { strokeMm, rodLengthMm: rod, offsetMm } = cylinderValues(document, cylinder)
     const [radius, offset] = [strokeMm / 2, Math.abs(offsetMm)]
     if (rod > radius + offset) return []
+    const sum = `${say(radius, 'mm')} + ${say(offset, 'mm')} = ${say(radius + offset, 'mm')}`
     return refuse(
       [
         fieldPath(document, index, 'rodLengthMm'),
@@ -81,7 +82,9 @@ function rods(document: CrankTrain): Issue[] {
         fieldPath(document, index, 'offsetMm'),
       ],
       'rod-too-short',
-      `The rod of cylinder ${cylinder.id} is too short to turn: ${say(rod, 'mm')} must be more than throw + offset = ${say(radius, 'mm')} + ${say(offset, 'mm')} = ${say(radius + offset, 'mm')}.`,
+      offset > radius && rod > radius
+        ? `Offset ${say(offsetMm, 'mm')} of cylinder ${cylinder.id} leaves no full turn: throw + offset = ${sum} is not less than the rod of ${say(rod, 'mm')}.`
+        : `The rod of cylinder ${cylinder.id} is too short to turn: ${say(rod, 'mm')} must be more than throw + offset = ${sum}.`,
       `Use a rod longer than ${say(radius + offset, 'mm')}, a shorter stroke or less offset.`,
     )
   })

@@ -74,7 +74,10 @@ function repeated(
 }
 
 /** The firing order is one field: its refusals say which entries they mean. */
-function orderIssues({ firingOrder, cylinders }: CrankTrain, known: ReadonlySet<string>): Issue[] {
+export function orderIssues(
+  { firingOrder, cylinders }: Pick<CrankTrain, 'firingOrder' | 'cylinders'>,
+  known: ReadonlySet<string> = namesOf(cylinders),
+): Issue[] {
   const times = new Map<string, number>()
   for (const name of firingOrder) times.set(name, (times.get(name) ?? 0) + 1)
   const unknown = [...times.keys()].filter((name) => !known.has(name))
