@@ -1,5 +1,5 @@
 import { and, asc, desc, eq, isNotNull, isNull, sql, type SQL } from 'drizzle-orm'
-import type { sceneSorts, sceneStates } from '@/lib/contracts/scenes'
+import type { sceneLayouts, sceneSorts, sceneStates } from '@/lib/contracts/scenes'
 import type { Transaction } from '../client'
 import { folded, scenes, sceneVersions, users } from '../schema'
 
@@ -15,6 +15,7 @@ const row = {
   updatedAt: scenes.updatedAt,
   cylinderCount: sceneVersions.cylinderCount,
   displacementCc: sceneVersions.displacementCc,
+  document: sceneVersions.document,
   message: sceneVersions.message,
   savedAt: sceneVersions.createdAt,
   savedBy: users.name,
@@ -57,6 +58,17 @@ const stateFilters: Record<(typeof sceneStates)[number], SQL | undefined> = {
   all: undefined,
 }
 
+const usedBanks = sql`(
+  select count(distinct cylinder ->> 'bank')
+  from jsonb_array_elements(${sceneVersions.document} -> 'train' -> 'cylinders') as cylinder)`
+
+const layoutFilters: Record<(typeof sceneLayouts)[number], SQL> = {
+  single: sql`${sceneVersions.cylinderCount} = 1`,
+  'in-line': sql`${sceneVersions.cylinderCount} > 1 and ${usedBanks} = 1`,
+  'two-banks': sql`${usedBanks} = 2`,
+  'more-banks': sql`${usedBanks} > 2`,
+}
+
 /** Where a page of a list ended: what it was sorted by, and the scene. */
 export interface ScenePosition {
   value: string
@@ -67,6 +79,7 @@ interface ScenePage {
   workshopId: string
   search?: string
   state: (typeof sceneStates)[number]
+  layout?: (typeof sceneLayouts)[number]
   sort: (typeof sceneSorts)[number]
   order?: 'up' | 'down'
   after?: ScenePosition
@@ -94,6 +107,7 @@ export async function pageOfScenes(tx: Transaction, page: ScenePage) {
       and(
         eq(scenes.workshopId, page.workshopId),
         stateFilters[page.state],
+        page.layout && layoutFilters[page.layout],
         pattern ? sql`${folded(scenes.title)} like ${folded(sql`${pattern}::text`)}` : undefined,
         after && sql`(${column}, ${scenes.id}) ${up ? sql`>` : sql`<`} (${bound}, ${after.id}::uuid)`,
       ),

@@ -18,8 +18,12 @@ export function observeGroups(tell) {
  * Starts a program as the leader of a process group of its own, so that all of it can be stopped;
  * `stopSignal` is the one that it takes for a polite request.
  */
-export function startGroup(command, args, { stopSignal = 'SIGTERM', ...options } = {}) {
-  const child = spawn(command, args, { detached: true, stdio: ['ignore', 'inherit', 'inherit'], ...options })
+export function startGroup(
+  command,
+  args,
+  { stopSignal = 'SIGTERM', stdio = ['ignore', 'inherit', 'inherit'], ...options } = {},
+) {
+  const child = spawn(command, args, { detached: true, stdio, ...options })
   const group = { pid: child.pid, began: beganAt(child.pid), stopSignal }
   const ended = new Promise((resolve) => {
     child.once('exit', (code, signal) => resolve({ code, signal }))

@@ -7,6 +7,7 @@ const limits: Record<LimitName | 'sign-in-account', { burst: number; perMinute: 
   reading: { burst: 600, perMinute: 1200 },
   writing: { burst: 120, perMinute: 240 },
   analyses: { burst: 60, perMinute: 120 },
+  printing: { burst: 20, perMinute: 30 },
   shared: { burst: 60, perMinute: 120 },
   'sign-in': { burst: 20, perMinute: 10 },
   'sign-in-account': { burst: 10, perMinute: 1 },

@@ -1,6 +1,6 @@
 import { z } from 'zod'
-import { analysisParts, LEAST_STEP_DEG } from '@/lib/mechanics/analysis'
-import { arrivingDocument } from './documents'
+import { analysisParts } from '@/lib/mechanics/analysis'
+import { cautionsSchema, loadRequest } from './load-request'
 import { operation } from './operation'
 
 const number = z.number()
@@ -102,7 +102,7 @@ export const analysisSchema = z
         grade: z.object({ permissibleKgMm: number, gradeMmS: number }).nullable(),
       })
       .optional(),
-    cautions: z.array(z.object({ code: z.string(), message: z.string() })).optional(),
+    cautions: cautionsSchema.optional(),
   })
   .meta({ id: 'Analysis' })
 export type AnalysisAnswer = z.output<typeof analysisSchema>
@@ -115,18 +115,7 @@ export const analyse = operation({
   for: 'anyone',
   limit: 'analyses',
   body: z.object({
-    train: arrivingDocument('CrankTrainInput'),
-    speedRpm: z.number().positive().max(100_000),
-    /** Divides 360. */
-    stepDeg: z
-      .number()
-      .min(LEAST_STEP_DEG)
-      .max(360)
-      .refine((step) => Math.abs(Math.round(360 / step) * step - 360) < 1e-6, {
-        error: (issue) => `${String(issue.input)}° does not divide 360°.`,
-        params: { fix: 'Give a step such as 0.5, 1, 2 or 5.' },
-      })
-      .default(1),
+    ...loadRequest,
     include: z.array(z.enum(analysisParts)).default([...analysisParts]),
     /** Balance quality grade of ISO 21940-11, in mm/s. */
     gradeMmS: z.number().positive().max(4000).default(16),

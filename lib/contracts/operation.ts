@@ -1,6 +1,7 @@
 import type { z } from 'zod'
 
-export type LimitName = 'reading' | 'writing' | 'analyses' | 'sign-in' | 'sign-up' | 'reset' | 'shared'
+export type LimitName =
+  'reading' | 'writing' | 'analyses' | 'printing' | 'sign-in' | 'sign-up' | 'reset' | 'shared'
 
 /**
  * One operation of the HTTP interface: what the route handler parses and answers, what the client may rely on,
@@ -20,9 +21,9 @@ export interface OperationContract {
   /** A request sent twice under one Idempotency-Key is carried out once. */
   idempotent?: boolean
   status: 200 | 201 | 202 | 204
-  /** Absent where the answer is empty or a picture. */
+  /** Absent where the answer is empty or a file. */
   answer?: z.ZodType
-  media?: 'image/png'
+  media?: 'image/png' | 'application/pdf' | 'model/gltf-binary' | 'text/csv'
   /** Problems beside those that follow from the above: status and when. */
   problems?: Partial<Record<404 | 409 | 503, string>>
 }

@@ -18,6 +18,9 @@ export const sceneSummarySchema = z
     headVersion: versionNumber,
     cylinderCount: z.int(),
     displacementCc: z.number(),
+    /** How the head is laid out and fires, in words. */
+    layout: z.string(),
+    firing: z.string(),
     /** Who saved the head, when, and what they said of it. */
     savedBy: z.string(),
     savedAt: timeSchema,
@@ -63,6 +66,7 @@ export const saveConflictSchema = z.object({
 export type SaveConflict = z.output<typeof saveConflictSchema>
 
 export const sceneStates = ['current', 'archived', 'all'] as const
+export const sceneLayouts = ['single', 'in-line', 'two-banks', 'more-banks'] as const
 export const sceneSorts = ['updated', 'created', 'title'] as const
 
 export const listScenes = operation({
@@ -77,6 +81,8 @@ export const listScenes = operation({
     workshop: idSchema.optional(),
     search: z.string().trim().max(200).optional(),
     state: z.enum(sceneStates).default('current'),
+    /** By how many banks of the head carry cylinders. */
+    layout: z.enum(sceneLayouts).optional(),
     sort: z.enum(sceneSorts).default('updated'),
     order: z.enum(['up', 'down']).optional(),
     after: cursorSchema.optional(),

@@ -88,12 +88,24 @@ export const openShareLink = operation({
   id: 'openShareLink',
   method: 'GET',
   path: '/api/v1/shared/{token}',
-  summary: 'What a share link opens; counts an opening',
+  summary: 'What a share link opens',
   for: 'anyone',
   limit: 'shared',
   params: byToken,
   status: 200,
   answer: sharedSceneSchema,
+  problems: neutral,
+})
+
+export const countOpening = operation({
+  id: 'countOpening',
+  method: 'POST',
+  path: '/api/v1/shared/{token}/openings',
+  summary: 'Count that somebody has the page of a share link before them',
+  for: 'anyone',
+  limit: 'shared',
+  params: byToken,
+  status: 204,
   problems: neutral,
 })
 
@@ -116,5 +128,6 @@ export const shareLinkOperations = [
   createShareLink,
   revokeShareLink,
   openShareLink,
+  countOpening,
   sharedPoster,
 ]

@@ -6,6 +6,7 @@ import { operationsOf, roleIn, type Person } from '@/lib/auth/access'
 import type { OpenedScene, SceneSummary, VersionAnswer } from '@/lib/contracts/scenes'
 import { notFound } from '@/lib/errors/problem'
 import { storedScene } from './scene-document'
+import { scenePattern } from './scene-pattern'
 
 export const sceneSummary = (row: SceneRow): SceneSummary => ({
   id: row.id,
@@ -15,6 +16,7 @@ export const sceneSummary = (row: SceneRow): SceneSummary => ({
   headVersion: row.headVersion,
   cylinderCount: row.cylinderCount,
   displacementCc: row.displacementCc,
+  ...scenePattern(row.id, row.headVersion, row.document),
   savedBy: row.savedBy,
   savedAt: row.savedAt.toISOString(),
   message: row.message,

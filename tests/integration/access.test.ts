@@ -26,6 +26,7 @@ const tries: Record<Operation, Try[]> = {
     ({ sceneId }) => ({ method: 'GET', path: `scenes/${sceneId}` }),
     ({ sceneId }) => ({ method: 'GET', path: `scenes/${sceneId}/versions` }),
     ({ sceneId }) => ({ method: 'GET', path: `scenes/${sceneId}/versions/1` }),
+    ({ sceneId }) => ({ method: 'GET', path: `scenes/${sceneId}/versions/1/design-sheet.pdf` }),
     ({ sceneId }) => ({ method: 'GET', path: `scenes/${sceneId}/thumbnail.png` }),
   ],
   'scene.create': [

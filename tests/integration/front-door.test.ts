@@ -1,7 +1,7 @@
 import { beforeAll, describe, expect, it } from 'vitest'
 import { problemSchema } from '@/lib/contracts/common'
 import { call } from './support/call'
-import { newOwner, type Someone } from './support/people'
+import { newOwner, password, type Someone } from './support/people'
 import { newEmail, useServer } from './support/server'
 
 useServer({
@@ -71,8 +71,8 @@ describe('limits', () => {
 
 describe('behind https', () => {
   it('the session cookie is Secure', async () => {
-    const answer = await call('POST', '/api/v1/auth/sign-up', {
-      body: { name: 'A', email: newEmail(), password: 'correct horse battery' },
+    const answer = await call('POST', '/api/v1/auth/sign-in', {
+      body: { email: owner.email, password },
       headers: from(newAddress()),
     })
     expect(answer.headers.get('set-cookie')).toMatch(/; Secure/)

@@ -116,3 +116,35 @@ describe('GET /scenes', () => {
     expect(second.next).toBeNull()
   })
 })
+
+describe('GET /scenes?layout=', () => {
+  const presets = ['single-450', 'i3-1000', 'v2-90-1000', 'v8x-5000', 'r7-11']
+
+  beforeAll(async () => {
+    owner = await newOwner()
+    for (const preset of presets) {
+      const body = { title: preset, document: sceneOf(preset) }
+      expect((await call('POST', '/api/v1/scenes', { cookie: owner.cookie, body })).status).toBe(201)
+    }
+  })
+
+  it('GET /scenes?layout= keeps scenes by the banks that carry cylinders, and pages through them', async () => {
+    const sorted = async (layout: string) => (await pages(`limit=1&layout=${layout}`)).flat().sort()
+    expect(await sorted('single')).toEqual(['single-450'])
+    expect(await sorted('in-line')).toEqual(['i3-1000'])
+    expect(await sorted('two-banks')).toEqual(['v2-90-1000', 'v8x-5000'])
+    expect(await sorted('more-banks')).toEqual(['r7-11'])
+    expect((await call('GET', '/api/v1/scenes?layout=star', owner)).status).toBe(422)
+  })
+
+  it('GET /scenes tells how each is laid out and fires', async () => {
+    const { scenes } = (await call('GET', '/api/v1/scenes?sort=title', owner)).body as Page
+    const told = Object.fromEntries(scenes.map(({ title, layout, firing }) => [title, [layout, firing]]))
+    expect(told).toMatchObject({
+      'single-450': ['One cylinder', 'once every 720°'],
+      'i3-1000': ['3 cylinders in line', 'every 240°'],
+      'v8x-5000': ['8 cylinders in two banks, 90° apart', 'every 90°'],
+      'v2-90-1000': ['2 cylinders in two banks, 90° apart', '450-270°'],
+    })
+  })
+})

@@ -25,6 +25,7 @@ async function newLink(body: object = {}) {
 }
 
 const open = (token: string) => call('GET', `/api/v1/shared/${token}`)
+const count = (token: string) => call('POST', `/api/v1/shared/${token}/openings`)
 const links = async () =>
   ((await call('GET', `/api/v1/scenes/${sceneId}/share-links`, owner)).body as { links: ShareLink[] }).links
 const withdraw = (id: string) => call('DELETE', `/api/v1/share-links/${id}`, owner)
@@ -69,9 +70,13 @@ describe('share links', () => {
     ])
   })
 
-  it('GET /shared/{token} counts each opening', async () => {
+  it('POST /shared/{token}/openings counts each opening; reading, as mail scanners do, counts none', async () => {
     const { link, token } = await newLink()
-    await Promise.all([1, 2, 3, 4].map(() => open(token)))
+    await Promise.all([1, 2].map(() => open(token)))
+    const untouched = (await links()).find(({ id }) => id === link.id)
+    expect(untouched).toMatchObject({ opened: 0, lastOpenedAt: null })
+    const answers = await Promise.all([1, 2, 3, 4].map(() => count(token)))
+    expect(answers.map(({ status }) => status)).toEqual([204, 204, 204, 204])
     const counted = (await links()).find(({ id }) => id === link.id)
     expect(counted).toMatchObject({ opened: 4, state: 'live' })
     expect(counted?.lastOpenedAt).not.toBeNull()
@@ -84,15 +89,17 @@ describe('share links', () => {
     await server.sql`update share_links set ends_at = now() where id = ${ended.link.id}`
     expect((await withdraw(withdrawn.link.id)).body).toMatchObject({ link: { state: 'withdrawn' } })
     const tokens = [ended.token, withdrawn.token, 'A'.repeat(32), 'x', 'y'.repeat(500), '%00']
-    const answers = await Promise.all(tokens.map(open))
-    for (const { status, body, headers } of answers) {
-      expect(status).toBe(404)
-      expect(body).toEqual(answers[0].body)
-      expect([...headers]).toEqual([...answers[0].headers])
+    for (const ask of [open, count]) {
+      const answers = await Promise.all(tokens.map(ask))
+      for (const { status, body, headers } of answers) {
+        expect(status).toBe(404)
+        expect(body).toEqual(answers[0].body)
+        expect([...headers]).toEqual([...answers[0].headers])
+      }
     }
     expect((await links()).find(({ id }) => id === ended.link.id)).toMatchObject({
       state: 'ended',
-      opened: 1,
+      opened: 0,
     })
   })
 

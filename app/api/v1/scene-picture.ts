@@ -6,6 +6,8 @@ import type { InkTheme } from '@/scene/frame/types'
 import type { Scene } from '@/scene/model/scene'
 import { toTrain } from '@/scene/model/to-train'
 import { buildStageModel } from '@/scene/stage/build-stage-model'
+import { cutRig } from '@/scene/stage/cut-rig'
+import { createForced, turnForced } from '@/scene/stage/forced-picture'
 import { createPicture, fillVisibility, turnPicture } from '@/scene/stage/picture'
 
 /** The colours of app/tokens.css, which a server cannot ask a browser for; a test holds the two together. */
@@ -49,27 +51,25 @@ const degree = Math.PI / 180
 const rpm = Math.PI / 30
 
 /** A scene as PNG: its engine at the saved angle and view, cut and hidden as saved. */
-export function drawScene(scene: Scene, theme: keyof typeof inkThemes, size: PictureSize): Promise<Buffer> {
+export function drawScene(
+  scene: Scene,
+  theme: keyof typeof inkThemes | InkTheme,
+  size: PictureSize,
+): Promise<Buffer> {
   const { train: document, view } = scene
   const { width, height, ratio } = size
   const model = buildStageModel(document, toTrain(document), view.speedRpm * rpm)
-  const picture = createPicture(model, view.sectionAxialMm === null ? null : view.sectionAxialMm / 1000)
+  const axial = view.sectionAxialMm === null ? null : view.sectionAxialMm / 1000
+  const picture = createPicture({ rig: cutRig(model.rig, axial) })
   const { hidden, ghost, overlays } = view
-  fillVisibility(picture, {
-    hidden,
-    ghost,
-    overlays,
-    sectionAxial: null,
-    lit: [],
-    balloons: [],
-    forceUnit: 'N',
-  })
-  turnPicture(picture, view.angleDeg * degree, overlays.pressure)
+  fillVisibility(picture, { hidden, ghost, lit: [] })
+  turnPicture(picture, view.angleDeg * degree)
+  turnForced(createForced(picture, model), view.angleDeg * degree, overlays.pressure)
   const { viewProjection, eye, tint } = picture.frame
   const camera = view.camera ? cameraOf(view.camera) : namedCamera('free', picture.rig, width / height)
   fillViewProjection(viewProjection, eye, camera, width / height)
   const lens = { viewProjection, eye, tint, ratio }
-  const colours = inkThemes[theme]
+  const colours = typeof theme === 'string' ? inkThemes[theme] : theme
   const rgba = drawPoster(
     picture.rig,
     picture.pose,
