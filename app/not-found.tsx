@@ -1,7 +1,7 @@
-import Link from 'next/link'
 import { GuestSheet } from '@/components/shell/guest-sheet'
 import { TitleActions, TitleBlock, TitleCell } from '@/components/shell/title-block'
 
+/** Every page carries what this needs in the browser, so it needs nothing there. */
 export default function NotFoundSheet() {
   return (
     <GuestSheet brand="Counterthrow" className="gone">
@@ -17,9 +17,11 @@ export default function NotFoundSheet() {
           <h1 className="v title">Nothing to show</h1>
         </TitleCell>
         <TitleActions>
-          <Link className="btn pri" href="/">
-            First page
-          </Link>
+          <form action="/">
+            <button type="submit" className="btn pri">
+              First page
+            </button>
+          </form>
         </TitleActions>
       </TitleBlock>
     </GuestSheet>

@@ -1,14 +1,13 @@
 import type { Metadata } from 'next'
 import { notFound, redirect } from 'next/navigation'
 import { signOutAction } from '@/app/actions'
-import { MarginNotes } from '@/components/analysis/margin-notes'
-import { BenchLoader } from '@/components/bench/bench-loader'
 import { Sheet } from '@/components/shell/sheet'
 import { operationsOf, type Person } from '@/lib/auth/access'
 import { currentPerson } from '@/lib/auth/current-person'
 import { Problem } from '@/lib/errors/problem'
 import { openScene } from '@/lib/services/open-scene'
 import { readDraft } from '@/lib/services/read-draft'
+import { BenchWithLeaves } from './leaves'
 
 export const metadata: Metadata = { title: 'Bench' }
 
@@ -36,8 +35,7 @@ export default async function BenchPage({ searchParams }: Props) {
       person={person && membership && { name: person.name, workshop: membership.workshopName }}
       signOut={signOutAction}
     >
-      <BenchLoader
-        notes={<MarginNotes />}
+      <BenchWithLeaves
         person={
           person &&
           membership && {

@@ -1,5 +1,5 @@
 import type { ReactNode } from 'react'
-import { Edges } from '@/components/shell/sheet'
+import { Edges } from '@/components/shell/edges'
 import { Mark } from '@/components/shell/mark'
 import { ThemeSwitch } from '@/components/shell/theme-switch'
 import Link from 'next/link'

@@ -2,12 +2,12 @@
 
 import { formatQuantity } from '@/lib/units/format'
 import { useResults, useSessionState } from '@/scene/session/react'
-import { CycleChart } from './cycle-chart'
-import { Figures, Note } from './note'
+import { CycleChart } from '@/components/figures/cycle-chart'
+import { verdictSentence } from '@/components/figures/balance-verdict'
+import { Figures, Note } from '@/components/figures/note'
 import { OrderTable, SenseLegend } from './order-table'
-import { most, size } from './signal'
-import { SpeedWords } from './speed-words'
-import { verdict } from './verdict'
+import { most, size } from '@/components/figures/signal'
+import { SpeedWords } from '@/components/figures/speed-words'
 
 export function BalanceNotes() {
   const results = useResults()
@@ -23,16 +23,16 @@ export function BalanceNotes() {
       <Note title="Balance" at={<SpeedWords />}>
         <OrderTable orders={analysis.orders} bare={bareOrders} system={system} />
         <SenseLegend />
-        {verdict(results, system).map((sentence) => (
-          <p className="say" key={sentence}>
-            {sentence}
-          </p>
-        ))}
+        <p className="say">{verdictSentence(results, system)}</p>
       </Note>
       <Note title="Shaking force" at="on the frame">
         <Figures
           rows={[
-            { name: `Most, at ${peak.force.at}°`, figure: formatQuantity(peak.force.value, 'force', system) },
+            {
+              name: `Most, at ${peak.force.at}°`,
+              figure: formatQuantity(peak.force.value, 'force', system),
+              behind: { figure: 'shaking-force', angleDeg: peak.force.at },
+            },
           ]}
         />
         <CycleChart
@@ -50,6 +50,7 @@ export function BalanceNotes() {
             {
               name: `Most, at ${peak.couple.at}°`,
               figure: formatQuantity(peak.couple.value, 'torque', system),
+              behind: { figure: 'shaking-couple', angleDeg: peak.couple.at },
             },
           ]}
         />
@@ -65,13 +66,22 @@ export function BalanceNotes() {
       <Note title="Residual" at="crank with bob-weights">
         <Figures
           rows={[
-            { name: 'Static', figure: formatQuantity(residual.staticKgMm / 1e3, 'unbalance', system) },
-            { name: 'Couple', figure: formatQuantity(residual.coupleKgMm2 / 1e6, 'coupleUnbalance', system) },
+            {
+              name: 'Static',
+              figure: formatQuantity(residual.staticKgMm / 1e3, 'unbalance', system),
+              behind: 'residual-static',
+            },
+            {
+              name: 'Couple',
+              figure: formatQuantity(residual.coupleKgMm2 / 1e6, 'coupleUnbalance', system),
+              behind: 'residual-couple',
+            },
             ...(grade
               ? [
                   {
                     name: `Allowed at G ${grade.gradeMmS}`,
                     figure: formatQuantity(grade.permissibleKgMm / 1e3, 'unbalance', system),
+                    behind: 'permissible-residual' as const,
                   },
                 ]
               : []),
@@ -97,11 +107,13 @@ function BobWeights() {
               {
                 name: `Bob-weight, each of ${weights.length}`,
                 figure: formatQuantity(first.kg, 'mass', system),
+                behind: 'bob-weight',
               },
             ]
           : weights.map(([id, weight]) => ({
               name: `Bob-weight, throw ${id}`,
               figure: formatQuantity(weight.kg, 'mass', system),
+              behind: { figure: 'bob-weight', throw: id },
             }))
       }
     />

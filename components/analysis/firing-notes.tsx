@@ -1,17 +1,9 @@
 'use client'
 
-import { formatNumber } from '@/lib/units/format'
 import { useResults } from '@/scene/session/react'
-import { Note } from './note'
-
-const degrees = (values: readonly number[]) =>
-  values
-    .map((value) => formatNumber(value, { decimals: Math.abs(value - Math.round(value)) < 0.05 ? 0 : 1 }))
-    .join('-')
-
-/** "8 × 90", where all are alike. */
-const said = (values: readonly number[], even: boolean) =>
-  even && values.length > 2 ? `${values.length} × ${degrees([values[0]])}` : degrees(values)
+import { BehindFigure } from '@/components/figures/behind'
+import { intervalWords } from '@/components/figures/interval-words'
+import { Note } from '@/components/figures/note'
 
 /** Intervals of the engine, of each bank and of each collector, and whether they are even. */
 export function FiringNotes() {
@@ -19,12 +11,13 @@ export function FiringNotes() {
   const { firing } = analysis
   const single = document.cylinders.length === 1
   const rows = [
-    { name: 'Engine', ...firing },
+    { name: 'Engine', of: {}, ...firing },
     ...(document.banks.length > 1
-      ? Object.entries(firing.banks).map(([id, bank]) => ({ name: `Bank ${id}`, ...bank }))
+      ? Object.entries(firing.banks).map(([id, bank]) => ({ name: `Bank ${id}`, of: { bank: id }, ...bank }))
       : []),
     ...Object.entries(firing.collectors).map(([id, collector]) => ({
       name: `Collector ${id}`,
+      of: { collector: id },
       ...collector,
     })),
   ]
@@ -32,10 +25,17 @@ export function FiringNotes() {
     <Note title="Firing intervals" at="degrees">
       <table className="otab firing-table">
         <tbody>
-          {rows.map(({ name, intervalsDeg, even }) => (
+          {rows.map(({ name, of, intervalsDeg, even }) => (
             <tr key={name}>
               <th scope="row">{name}</th>
-              <td>{said(intervalsDeg, even)}</td>
+              <td>
+                <BehindFigure
+                  behind={{ figure: 'firing-evenness', ...of }}
+                  label={`${name}, intervals ${intervalWords(intervalsDeg, even)}`}
+                >
+                  {intervalWords(intervalsDeg, even)}
+                </BehindFigure>
+              </td>
               <td className="word">{single ? '' : even ? 'even' : 'uneven'}</td>
             </tr>
           ))}

@@ -3,8 +3,11 @@
 import type { ReactNode } from 'react'
 import { StatusMark } from '@/components/ui/icon'
 import { formatNumber, formatQuantity } from '@/lib/units/format'
+import { always } from '@/scene/model/class-ranges'
+import { usualRange } from '@/scene/model/engine-class'
 import { useResults, useSessionState } from '@/scene/session/react'
-import { Figures, Note } from './note'
+import { Figures, Note } from '@/components/figures/note'
+import { ClearanceNote } from './clearance-note'
 
 function Status({ ok, children }: { ok: boolean; children: ReactNode }) {
   return (
@@ -24,6 +27,8 @@ export function FitNotes() {
   const overlap = stroke && pin && main ? (pin + main) / 2 - stroke / 2 : null
   const ratio = stroke && rod ? rod / stroke : null
   const mean = analysis.train.meanPistonSpeedMS
+  const ratios = usualRange(document, 'rodToStroke') ?? always.rodToStroke
+  const mostSpeed = usualRange(document, 'pistonSpeedMost')?.[1] ?? 25
   return (
     <>
       {overlap !== null ? (
@@ -36,20 +41,38 @@ export function FitNotes() {
           }
         >
           <Figures
-            rows={[{ name: 'Pin over main', figure: formatQuantity(overlap / 1000, 'length', system) }]}
+            rows={[
+              {
+                name: 'Pin over main',
+                figure: formatQuantity(overlap / 1000, 'length', system),
+                behind: 'journal-overlap',
+              },
+            ]}
           />
         </Note>
       ) : null}
       {ratio !== null ? (
-        <Note title="Rod to stroke" at={<Status ok={ratio >= 1.35 && ratio <= 2.7}>usual 1.5 to 1.9</Status>}>
+        <Note
+          title="Rod to stroke"
+          at={
+            <Status
+              ok={ratio >= ratios[0] && ratio <= ratios[1]}
+            >{`usual ${ratios[0]} to ${ratios[1]}`}</Status>
+          }
+        >
           <Figures
             rows={[
-              { name: 'Rod to stroke', figure: { text: formatNumber(ratio, { decimals: 2 }), unit: '' } },
+              {
+                name: 'Rod to stroke',
+                figure: { text: formatNumber(ratio, { decimals: 2 }), unit: '' },
+                behind: 'rod-to-stroke',
+              },
               ...(bore && stroke
                 ? [
                     {
                       name: 'Bore to stroke',
                       figure: { text: formatNumber(bore / stroke, { decimals: 2 }), unit: '' },
+                      behind: 'bore-to-stroke' as const,
                     },
                   ]
                 : []),
@@ -57,12 +80,17 @@ export function FitNotes() {
           />
         </Note>
       ) : null}
-      <Note title="Mean piston speed" at={<Status ok={mean <= 25}>usual to 20, racing 25</Status>}>
+      <ClearanceNote />
+      <Note
+        title="Mean piston speed"
+        at={<Status ok={mean <= mostSpeed}>{`usual to ${mostSpeed} m/s`}</Status>}
+      >
         <Figures
           rows={[
             {
               name: `At ${formatNumber(speedRpm, { decimals: 0 })} rpm`,
               figure: formatQuantity(mean, 'velocity', system),
+              behind: 'mean-piston-speed',
             },
             ...(document.operating?.maxRpm && stroke
               ? [
@@ -85,6 +113,7 @@ export function FitNotes() {
             {
               name: 'All cylinders',
               figure: formatQuantity(analysis.train.displacementCc / 1e6, 'volume', system),
+              behind: 'displacement',
             },
           ]}
         />

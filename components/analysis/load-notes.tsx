@@ -3,11 +3,12 @@
 import { formatQuantity } from '@/lib/units/format'
 import { scaleFor } from '@/lib/units/quantities'
 import { useResults, useSessionState } from '@/scene/session/react'
-import { useCylinderChoice } from './cylinder-choice'
-import { CycleChart } from './cycle-chart'
-import { Figures, Note } from './note'
-import { least, most, size } from './signal'
-import { SpeedWords } from './speed-words'
+import { useCylinderChoice } from '@/components/figures/cylinder-choice'
+import { CycleChart } from '@/components/figures/cycle-chart'
+import { BehindFigure } from '@/components/figures/behind'
+import { Figures, Note } from '@/components/figures/note'
+import { least, most, size } from '@/components/figures/signal'
+import { SpeedWords } from '@/components/figures/speed-words'
 
 export function LoadNotes() {
   return (
@@ -33,9 +34,17 @@ function TurningMoment() {
     <Note title="Turning moment" at="all cylinders">
       <Figures
         rows={[
-          { name: 'Mean', figure: formatQuantity(torque.meanNm, 'torque', system) },
-          { name: 'Least to most', figure: { text: `${from.text} to ${to.text}`, unit: to.unit } },
-          { name: 'Energy, to and fro', figure: formatQuantity(torque.energyFluctuationJ, 'energy', system) },
+          { name: 'Mean', figure: formatQuantity(torque.meanNm, 'torque', system), behind: 'torque-mean' },
+          {
+            name: 'Least to most',
+            figure: { text: `${from.text} to ${to.text}`, unit: to.unit },
+            behind: { figure: 'torque', angleDeg: high.at },
+          },
+          {
+            name: 'Energy, to and fro',
+            figure: formatQuantity(torque.energyFluctuationJ, 'energy', system),
+            behind: 'energy-fluctuation',
+          },
         ]}
       />
       <CycleChart
@@ -62,7 +71,13 @@ function RodOnPin() {
   return (
     <Note title={load.crankPinN ? 'Rod on its pin' : 'Link rod on its knuckle'} at={choice}>
       <Figures
-        rows={[{ name: `Most, at ${peak.at}°`, figure: formatQuantity(peak.value, 'force', system) }]}
+        rows={[
+          {
+            name: `Most, at ${peak.at}°`,
+            figure: formatQuantity(peak.value, 'force', system),
+            behind: { figure: 'rod-load', cylinder, angleDeg: peak.at },
+          },
+        ]}
       />
       <CycleChart
         name={`Load of rod ${cylinder} on its pin`}
@@ -87,7 +102,11 @@ function SideThrust() {
     <Note title="Side thrust" at={choice}>
       <Figures
         rows={[
-          { name: `Most, at ${worst.at}°`, figure: formatQuantity(Math.abs(worst.value), 'force', system) },
+          {
+            name: `Most, at ${worst.at}°`,
+            figure: formatQuantity(Math.abs(worst.value), 'force', system),
+            behind: { figure: 'side-thrust', cylinder, angleDeg: worst.at },
+          },
         ]}
       />
       <CycleChart
@@ -131,8 +150,22 @@ function Mains() {
             return (
               <tr key={id}>
                 <th scope="row">{id}</th>
-                <td>{at(peakN)}</td>
-                <td>{at(meanN)}</td>
+                <td>
+                  <BehindFigure
+                    behind={{ figure: 'main-peak', main: id }}
+                    label={`Most on main ${id}, ${at(peakN)}`}
+                  >
+                    {at(peakN)}
+                  </BehindFigure>
+                </td>
+                <td>
+                  <BehindFigure
+                    behind={{ figure: 'main-mean', main: id }}
+                    label={`Mean on main ${id}, ${at(meanN)}`}
+                  >
+                    {at(meanN)}
+                  </BehindFigure>
+                </td>
               </tr>
             )
           })}
@@ -144,6 +177,7 @@ function Mains() {
             {
               name: 'Most, on its area',
               figure: formatQuantity(worst / ((mainDiaMm / 1000) * (mainLengthMm / 1000)), 'stress', system),
+              behind: 'main-specific-load',
             },
           ]}
         />

@@ -6,7 +6,7 @@ import { BalanceNotes } from './balance-notes'
 import { FitNotes } from './fit-notes'
 import { LoadNotes } from './load-notes'
 import { MotionNotes } from './motion-notes'
-import { Caution } from './note'
+import { Caution } from '@/components/figures/note'
 
 type Page = 'balance' | 'loads' | 'motion' | 'fits'
 

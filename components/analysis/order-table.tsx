@@ -1,3 +1,4 @@
+import { BehindFigure } from '@/components/figures/behind'
 import { formatNumber } from '@/lib/units/format'
 import { scaleFor, type Scale, type System } from '@/lib/units/quantities'
 import { fromSi } from '@/lib/units/units'
@@ -21,6 +22,18 @@ const sense = {
 }
 
 const columns = ['forwardN', 'backwardN', 'forwardNm', 'backwardNm'] as const
+const behindOf = {
+  forwardN: 'order-forward',
+  backwardN: 'order-backward',
+  forwardNm: 'order-couple-forward',
+  backwardNm: 'order-couple-backward',
+} as const
+const wordsOf = {
+  forwardN: 'force forward',
+  backwardN: 'force backward',
+  forwardNm: 'couple forward',
+  backwardNm: 'couple backward',
+}
 const decimalsFor = (most: number, scale: Scale) => {
   const shown = fromSi(most, scale.unit)
   return shown >= 1000 ? 0 : shown >= 100 ? 1 : 2
@@ -73,7 +86,14 @@ export function OrderTable({ orders, bare, system }: { orders: Order[]; bare: Or
           <tr key={name} className={sub ? 'sub' : undefined}>
             <th scope="row">{name}</th>
             {columns.map((key) => (
-              <td key={key}>{cell(order[key], key.endsWith('Nm') ? couple : force)}</td>
+              <td key={key}>
+                <BehindFigure
+                  behind={{ figure: behindOf[key], order: order.order, bare: sub }}
+                  label={`Order ${name}, ${wordsOf[key]}`}
+                >
+                  {cell(order[key], key.endsWith('Nm') ? couple : force)}
+                </BehindFigure>
+              </td>
             ))}
           </tr>
         ))}

@@ -1,8 +1,11 @@
 'use client'
 
-import { useEffect, useEffectEvent, useMemo, useState, type ReactNode } from 'react'
+import { useEffect, useEffectEvent, useMemo, useState, type ComponentType, type ReactNode } from 'react'
 import { useStore } from 'zustand'
+import { LeafContext } from '@/components/figures/leaf'
 import { Slips, useSlip } from '@/components/ui/slips'
+import { StampContext } from '@/components/ui/stamp'
+import { panelId, TabList } from '@/components/ui/tabs'
 import { call } from '@/lib/contracts/call'
 import type { keepDraft as keepDraftOperation, keepSceneDraft } from '@/lib/contracts/drafts'
 import { newScene } from '@/scene/model/default-scene'
@@ -12,6 +15,7 @@ import { BenchContext, ResultsContext, useBench, useSessionState } from '@/scene
 import { createResults } from '@/scene/session/results'
 import { sameTrain } from '@/scene/session/same-train'
 import type { Saved } from '@/scene/session/session'
+import { stampOf } from '@/scene/session/stamp'
 import { begin, setClock, type BenchStart } from './begin'
 import { Drive } from './drive'
 import { FiringStrip } from './firing-strip'
@@ -23,6 +27,7 @@ import { SetOutDialog } from './set-out-dialog'
 import { ShareDialog } from './share-dialog'
 import { StagePanel } from './stage-panel'
 import { BenchTitle } from './title'
+import { useTicking } from './use-clock'
 import { useFiles } from './use-files'
 import { useSaving } from './use-saving'
 
@@ -30,23 +35,29 @@ export interface BenchProps extends BenchStart {
   person: BenchPerson | null
   /** The margin notes, a feature of their own. */
   notes: ReactNode
+  /** The pages beside the drawing, features too. */
+  leaves: Record<string, { title: string; Content: ComponentType }>
 }
 
 /** The page where a crank train is described and run. */
-export function Bench({ person, notes, ...start }: BenchProps) {
+export function Bench({ person, notes, leaves, ...start }: BenchProps) {
   const [tools] = useState(() => begin(start))
   const [compute] = useState(createResults)
+  const [stamp] = useState(() => () => stampOf(tools.session.getState(), new Date()))
   const scene = useStore(tools.session, (state) => state.scene)
   const base = useStore(tools.session, (state) => state.base)
   const results = useMemo(() => compute(scene), [compute, scene])
 
+  useTicking(tools.clock)
   useEffect(() => setClock(tools), [tools, base])
   useEffect(() => tools.clock.setCycle(results.train.cycle), [tools, results.train.cycle])
   return (
     <BenchContext value={tools}>
       <ResultsContext value={results}>
         <Slips>
-          <Sections person={person} notes={notes} />
+          <StampContext value={stamp}>
+            <Sections person={person} notes={notes} leaves={leaves} />
+          </StampContext>
         </Slips>
       </ResultsContext>
     </BenchContext>
@@ -55,7 +66,7 @@ export function Bench({ person, notes, ...start }: BenchProps) {
 
 type Open = 'presets' | 'set-out' | 'save' | 'share' | 'sign-in-save' | 'sign-in-share' | null
 
-function Sections({ person, notes }: Pick<BenchProps, 'person' | 'notes'>) {
+function Sections({ person, notes, leaves }: Pick<BenchProps, 'person' | 'notes' | 'leaves'>) {
   const { session } = useBench()
   const slip = useSlip()
   const [open, setOpen] = useState<Open>(null)
@@ -71,10 +82,15 @@ function Sections({ person, notes }: Pick<BenchProps, 'person' | 'notes'>) {
   const close = () => setOpen(null)
   useUndoKeys()
   const sceneId = saved?.sceneId
-  // The address says which scene this is, so that a reload and a bookmark find it again.
+  const [leaf, setLeaf] = useLeaf(leaves)
+  // The address says which scene and leaf this is, so that a reload and a bookmark find it again.
   useEffect(() => {
-    window.history.replaceState(null, '', sceneId ? `/bench?scene=${sceneId}` : '/bench')
-  }, [sceneId])
+    const asked = new URLSearchParams({
+      ...(sceneId && { scene: sceneId }),
+      ...(leaf !== DRAWING && { leaf }),
+    })
+    window.history.replaceState(null, '', asked.size > 0 ? `/bench?${asked}` : '/bench')
+  }, [sceneId, leaf])
 
   const onSave = () => setOpen(person ? 'save' : 'sign-in-save')
   const onShare = () => {
@@ -90,14 +106,36 @@ function Sections({ person, notes }: Pick<BenchProps, 'person' | 'notes'>) {
     close()
     slip({ text: `Version ${session.getState().saved!.version} saved.` })
   }
+  const { Content } = leaves[leaf] ?? {}
   return (
-    <>
-      {notes}
-      <StagePanel
-        onRenderer={(kind, reason) =>
-          setDrawn({ words: kind === 'webgl' ? 'with 3D' : 'without 3D', reason })
-        }
-      />
+    <LeafContext value={setLeaf}>
+      <div className="leaf-tabs">
+        <TabList
+          id={LEAVES}
+          label="Leaves"
+          value={leaf}
+          tabs={[
+            { value: DRAWING, label: 'Drawing' },
+            ...Object.entries(leaves).map(([value, { title: label }]) => ({ value, label })),
+          ]}
+          onChange={setLeaf}
+        />
+      </div>
+      {Content ? (
+        <div className="leaf-area" role="tabpanel" id={panelId(LEAVES)} aria-labelledby={`${LEAVES}-${leaf}`}>
+          <Content />
+        </div>
+      ) : (
+        <>
+          {notes}
+          <StagePanel
+            id={panelId(LEAVES)}
+            onRenderer={(kind, reason) =>
+              setDrawn({ words: kind === 'webgl' ? 'with 3D' : 'without 3D', reason })
+            }
+          />
+        </>
+      )}
       <PartsList
         onPresets={() => setOpen('presets')}
         onSetOut={() => setOpen('set-out')}
@@ -168,8 +206,19 @@ function Sections({ person, notes }: Pick<BenchProps, 'person' | 'notes'>) {
         <ShareDialog saved={saved} changed={changed} title={title} onClose={close} />
       ) : null}
       {files.dialog}
-    </>
+    </LeafContext>
   )
+}
+
+const LEAVES = 'leaves'
+const DRAWING = 'drawing'
+
+/** Which leaf is open; the address may ask for one. */
+function useLeaf(leaves: BenchProps['leaves']) {
+  return useState(() => {
+    const asked = new URLSearchParams(window.location.search).get('leaf')
+    return asked !== null && asked in leaves ? asked : DRAWING
+  })
 }
 
 const clockTime = (at: number) =>

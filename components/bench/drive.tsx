@@ -1,14 +1,15 @@
 'use client'
 
 import { useEffect, useId } from 'react'
+import { stepClock } from '@/components/drawing/clock-moves'
 import { Icon } from '@/components/ui/icon'
 import { NumberField } from '@/components/ui/number-field'
 import { SliderRule } from '@/components/ui/slider-rule'
 import { formatNumber } from '@/lib/units/format'
 import { useBench, useSessionState } from '@/scene/session/react'
 import { fields } from './fields'
-import { RefusedNote } from './refused-note'
-import { stepClock, usePlaying, useReducedMotion } from './use-clock'
+import { RefusedNote } from '@/components/figures/refused-note'
+import { usePlaying, useReducedMotion } from './use-clock'
 
 const SLOWEST = 2000
 const slownesses = [1, 2, 5, 10, 20, 50, 100, 200, 500, 1000, 2000]

@@ -1,34 +1,24 @@
 import type { UnitName } from '@/lib/units/units'
-import type { Quantity } from '@/lib/units/quantities'
 import { quantityField, type QuantityField, type QuantityFieldOptions } from '@/scene/session/field'
-import { getAt, type Path } from '@/scene/session/path'
+import { deckHeightField } from '@/scene/session/clearance-fields'
+import { crankcaseField, heatReleaseFields } from '@/scene/session/gas-fields'
+import type { Path } from '@/scene/session/path'
+import { plainField } from '@/scene/session/plain-field'
 import { setThrowPitch, throwPitch } from '@/scene/session/structure'
-import { percentSlip, slip, usual } from '@/scene/session/usual'
-
-/** A field that reads and writes one number of the train. */
-export function plainField(
-  path: Path,
-  label: string,
-  quantity: Quantity,
-  documentUnit: UnitName,
-  more: Partial<QuantityFieldOptions> = {},
-): QuantityField {
-  const full: Path = ['train', ...path]
-  return quantityField({
-    key: path.join('.'),
-    label,
-    quantity,
-    documentUnit,
-    get: (scene) => getAt(scene, full) as number | undefined,
-    changes: (value) => [{ path: full, value }],
-    ...more,
-  })
-}
+import {
+  angleSlip,
+  centreSlip,
+  notNegative,
+  factorSlip,
+  slip,
+  speedSlip,
+  usual,
+} from '@/scene/session/usual'
 
 const length = (path: Path, label: string, more?: Partial<QuantityFieldOptions>) =>
-  plainField(path, label, 'length', 'mm', more)
+  plainField(path, label, 'length', 'mm', { refuse: notNegative('A length'), ...more })
 const mass = (path: Path, label: string, more?: Partial<QuantityFieldOptions>) =>
-  plainField(path, label, 'mass', 'kg', more)
+  plainField(path, label, 'mass', 'kg', { refuse: notNegative('A mass'), ...more })
 const optional = { optional: true }
 const lengthFar = { below: 3, above: 4 }
 const massFar = { below: 12, above: 40 }
@@ -50,6 +40,7 @@ export const fields = {
         { path: ['train', 'banks', 1, 'angleDeg'], value: middle + value! / 2 },
       ]
     },
+    doubt: angleSlip,
   }),
   throwPitch: quantityField({
     key: 'throwPitch',
@@ -72,10 +63,10 @@ export const fields = {
     doubt: (value, scene, typed) =>
       // A rod that is merely short is refused by its own rule, with its own words.
       value > 0.5 * (scene.train.cylinderDefaults.strokeMm ?? 0) || typed.number < 12
-        ? slip(usual.rodLength, 'mm', lengths, lengthFar)(value, scene, typed)
+        ? slip(usual.rodLength, 'mm', lengths, { below: 3, above: 1.6 })(value, scene, typed)
         : null,
   }),
-  offset: length(['cylinderDefaults', 'offsetMm'], 'Offset', { key: 'offsetMm' }),
+  offset: length(['cylinderDefaults', 'offsetMm'], 'Offset', { key: 'offsetMm', refuse: undefined }),
   compressionRatio: plainField(
     ['cylinderDefaults', 'compressionRatio'],
     'Compression ratio',
@@ -90,7 +81,9 @@ export const fields = {
   rings: mass(['masses', 'ringsKg'], 'Rings'),
   locks: mass(['masses', 'locksKg'], 'Pin locks'),
   rod: mass(['masses', 'rod', 'massKg'], 'Rod', { doubt: slip(usual.rod, 'kg', masses, massFar) }),
-  rodCentre: length(['masses', 'rod', 'cgFromBigEndMm'], 'Rod c.g. from big end'),
+  rodCentre: length(['masses', 'rod', 'cgFromBigEndMm'], 'Rod c.g. from big end', {
+    doubt: centreSlip,
+  }),
   rodInertia: plainField(['masses', 'rod', 'inertiaKgMm2'], 'Rod inertia', 'inertia', 'kg mm²', optional),
   bearing: mass(['masses', 'bigEndBearingKg'], 'Big-end bearing'),
   oil: mass(['masses', 'oilAllowanceKg'], 'Oil allowance', {
@@ -106,27 +99,29 @@ export const fields = {
   webWidth: length(['shape', 'webWidthMm'], 'Web width', optional),
   counterweightRadius: length(['shape', 'counterweightRadiusMm'], 'Counterweight radius', optional),
   compressionHeight: length(['shape', 'compressionHeightMm'], 'Compression height', optional),
+  deckHeight: deckHeightField,
   skirt: length(['shape', 'skirtBelowPinMm'], 'Skirt below pin', optional),
   crankMass: mass(['crankMassKg'], 'Crank mass', optional),
   flywheel: plainField(['inertia', 'flywheelKgM2'], 'Flywheel inertia', 'inertia', 'kg m²', optional),
   freeEnd: plainField(['inertia', 'freeEndKgM2'], 'Free-end inertia', 'inertia', 'kg m²', optional),
-  balanceFactor: plainField(['balanceFactor'], 'Balance factor', 'share', '', { doubt: percentSlip }),
-  reference: length(['referenceAxialMm'], 'Couples about', optional),
-  idle: plainField(['operating', 'idleRpm'], 'Idle', 'speed', 'rpm', { key: 'idleRpm', optional: true }),
-  rated: plainField(['operating', 'ratedRpm'], 'Rated', 'speed', 'rpm', optional),
-  most: plainField(['operating', 'maxRpm'], 'Most', 'speed', 'rpm', { key: 'maxRpm', optional: true }),
-  crankcase: plainField(['crankcasePressureBar'], 'Crankcase pressure', 'pressure', 'bar'),
-  intake: plainField(['gas', 'intakePressureBar'], 'Intake pressure', 'pressure', 'bar'),
-  exhaust: plainField(['gas', 'exhaustPressureBar'], 'Exhaust pressure', 'pressure', 'bar'),
-  gamma: plainField(['gas', 'gamma'], 'Ratio of specific heats', 'ratio', ''),
-  heat: plainField(['gas', 'heatPerCycleJ'], 'Heat a cycle', 'energy', 'J'),
-  burnStart: plainField(['gas', 'combustionStartDeg'], 'Burning starts', 'angle', '°'),
-  burnFor: plainField(['gas', 'combustionDurationDeg'], 'Burns for', 'angle', '°'),
-  wiebeA: plainField(['gas', 'wiebeA'], 'Wiebe a', 'ratio', ''),
-  wiebeM: plainField(['gas', 'wiebeM'], 'Wiebe m', 'ratio', ''),
-  intakeCloses: plainField(['gas', 'intakeClosesDeg'], 'Intake closes', 'angle', '°'),
-  exhaustOpens: plainField(['gas', 'exhaustOpensDeg'], 'Exhaust opens', 'angle', '°'),
-  blowdown: plainField(['gas', 'blowdownDeg'], 'Blowdown falls over', 'angle', '°'),
+  balanceFactor: plainField(['balanceFactor'], 'Balance factor', 'share', '', { doubt: factorSlip }),
+  reference: length(['referenceAxialMm'], 'Couples about', { optional: true, refuse: undefined }),
+  idle: plainField(['operating', 'idleRpm'], 'Idle', 'speed', 'rpm', {
+    key: 'idleRpm',
+    optional: true,
+    doubt: speedSlip,
+  }),
+  rated: plainField(['operating', 'ratedRpm'], 'Rated', 'speed', 'rpm', {
+    optional: true,
+    doubt: speedSlip,
+  }),
+  most: plainField(['operating', 'maxRpm'], 'Most', 'speed', 'rpm', {
+    key: 'maxRpm',
+    optional: true,
+    doubt: speedSlip,
+  }),
+  crankcase: crankcaseField,
+  ...heatReleaseFields,
   speed: quantityField({
     key: 'speedRpm',
     label: 'Engine speed',
@@ -134,18 +129,10 @@ export const fields = {
     documentUnit: 'rpm',
     get: ({ view }) => view.speedRpm,
     changes: (value) => [{ path: ['view', 'speedRpm'], value }],
-    refuse: (value) => (value < 0 ? 'A speed is 0 or more; “Reverse” turns the crank the other way.' : null),
-    doubt: (value, { train }, typed) => {
-      const stroke = train.cylinderDefaults.strokeMm ?? train.cylinders[0].strokeMm ?? 0
-      const piston = (2 * stroke * value) / 60000
-      if (piston <= 45) return null
-      const fewer = String(Math.round(typed.number / 10))
-      return {
-        head: 'Extra zero?',
-        message: `${Math.round(value).toLocaleString('en')} rpm is a mean piston speed of ${piston.toFixed(0)} m/s; usual is up to 27.`,
-        mends: [{ label: `Use ${fewer} rpm`, text: `${fewer} rpm` }],
-        keep: 'Keep it',
-      }
-    },
+    refuse: (value) =>
+      value < 0
+        ? { message: 'A speed is 0 or more; “Reverse” turns the crank the other way.', mends: [] }
+        : null,
+    doubt: speedSlip,
   }),
 } satisfies Record<string, QuantityField>

@@ -6,28 +6,36 @@ import { withUnit } from '@/lib/units/format'
 import { useBench, useSessionState } from '@/scene/session/react'
 import type { Field } from '@/scene/session/field'
 import type { Scene } from '@/scene/model/scene'
+import { doubtsId } from './doubt-rows'
 import { PartTable } from './part-table'
-import { RefusedNote } from './refused-note'
+import { RefusedNote } from '@/components/figures/refused-note'
 import type { ChoiceSpec, NumberedRow } from './part-rows'
+import { LockRow } from './lock-row'
+import { exceptions } from './own-fields'
 import { TraceRow } from './trace-row'
+import { UnequalParts } from './unequal-parts'
 
 interface Props extends NumberedRow {
-  /** A soft word about a value that was taken. */
-  word?: string
+  /** Words about its value stand below it. */
+  unusual?: boolean
 }
 
 /** One line of the parts list: its balloon, the part, the value and where the value comes from. */
-export function PartRow({ row, number, word }: Props) {
+export function PartRow({ row, number, unusual }: Props) {
   switch (row.is) {
     case 'figure':
     case 'text':
-      return <ValueRow row={row} number={number} word={word} />
+      return <ValueRow row={row} number={number} unusual={unusual} />
     case 'choice':
       return <ChoiceRow choice={row.choice} number={number} />
     case 'table':
       return <PartTable table={row.table} number={number} />
     case 'trace':
       return <TraceRow number={number} />
+    case 'unequal':
+      return <UnequalParts number={number} />
+    case 'lock':
+      return <LockRow lock={row.lock} number={number} />
   }
 }
 
@@ -62,7 +70,7 @@ function Line(props: {
 function ValueRow({
   row,
   number,
-  word,
+  unusual,
 }: Props & { row: Extract<NumberedRow['row'], { is: 'figure' | 'text' }> }) {
   const { session } = useBench()
   const scene = useSessionState((state) => state.scene)
@@ -78,6 +86,7 @@ function ValueRow({
     row.is === 'text' ? { text: row.field.show(scene), unit: row.unit ?? '' } : row.field.show(scene, system)
   const field: Field = row.field
   const note = `${id}-note`
+  const except = row.is === 'figure' ? exceptions(scene.train, row.field) : []
   return (
     <>
       <Line
@@ -85,7 +94,12 @@ function ValueRow({
         number={number}
         ringed={Boolean(row.kinds?.length)}
         bad={Boolean(refusal)}
-        label={<label htmlFor={id}>{field.label}</label>}
+        label={
+          <>
+            <label htmlFor={id}>{field.label}</label>
+            {except.length > 0 ? <span className="cap"> except {except.join(', ')}</span> : null}
+          </>
+        }
       >
         <td className={wide ? 'val wideval' : 'val'} colSpan={wide ? 2 : 1}>
           <NumberField
@@ -96,7 +110,7 @@ function ValueRow({
             placeholder={shown.text === '' ? '–' : undefined}
             refused={refusal?.text}
             understood={understood}
-            describedBy={refusal || word ? note : undefined}
+            describedBy={refusal ? note : unusual ? doubtsId(field.key) : undefined}
             onText={(text) => session.enter(field, text)}
             onDone={session.seal}
             onEscape={() => session.drop(field.key)}
@@ -113,14 +127,6 @@ function ValueRow({
               field={field}
               stands={withUnit(shown.text, shown.unit)}
             />
-          </td>
-        </tr>
-      ) : word ? (
-        <tr className="word">
-          <td colSpan={4}>
-            <p className="cap" id={note}>
-              {word}
-            </p>
           </td>
         </tr>
       ) : null}
@@ -145,6 +151,7 @@ function ChoiceRow({ choice, number }: { choice: ChoiceSpec; number: number }) {
   const refusal = useSessionState((state) => state.refused[choice.key])
   const id = useId()
   const value = choice.get(scene)
+  const options = typeof choice.options === 'function' ? choice.options(scene) : choice.options
   const field: Field = {
     key: choice.key,
     label: choice.label,
@@ -169,7 +176,7 @@ function ChoiceRow({ choice, number }: { choice: ChoiceSpec; number: number }) {
               session.seal()
             }}
           >
-            {choice.options.map((option) => (
+            {options.map((option) => (
               <option key={option.value} value={option.value}>
                 {option.label}
               </option>
@@ -184,7 +191,7 @@ function ChoiceRow({ choice, number }: { choice: ChoiceSpec; number: number }) {
               id={`${id}-note`}
               refusal={refusal}
               field={field}
-              stands={choice.options.find((option) => option.value === value)?.label ?? value}
+              stands={options.find((option) => option.value === value)?.label ?? value}
             />
           </td>
         </tr>

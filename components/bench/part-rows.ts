@@ -1,7 +1,11 @@
 import type { PartKind } from '@/scene/frame/types'
 import type { CrankTrain } from '@/scene/model/crank-train'
+import { engineClasses, engineClassNames } from '@/scene/model/class-ranges'
+import { guessedClass } from '@/scene/model/engine-class'
 import type { Scene } from '@/scene/model/scene'
+import { usualHeatRelease } from '@/scene/model/usual-heat-release'
 import type { QuantityField } from '@/scene/session/field'
+import type { Locks } from '@/scene/session/locks'
 import type { Change } from '@/scene/session/path'
 import { fields } from './fields'
 import { tables, type TableSpec } from './part-tables'
@@ -10,7 +14,7 @@ import { bankAngles, firingOrder, mainPlaces, throwAngles, type TextField } from
 export interface ChoiceSpec {
   key: string
   label: string
-  options: { value: string; label: string }[]
+  options: { value: string; label: string }[] | ((scene: Scene) => { value: string; label: string }[])
   get(scene: Scene): string
   changes(value: string, scene: Scene): Change[]
 }
@@ -22,6 +26,8 @@ type RowSpec = { kinds?: PartKind[]; balloon?: boolean; when?(scene: Scene): boo
   | { is: 'choice'; choice: ChoiceSpec }
   | { is: 'table'; table: TableSpec }
   | { is: 'trace' }
+  | { is: 'unequal' }
+  | { is: 'lock'; lock: keyof Locks }
 )
 
 interface RowGroup {
@@ -51,26 +57,10 @@ const choice = <K extends 'cycle' | 'rotation'>(
   },
 })
 
-const heatRelease = {
-  model: 'heat-release' as const,
-  intakePressureBar: 1,
-  exhaustPressureBar: 1.05,
-  gamma: 1.32,
-  combustionStartDeg: -18,
-  combustionDurationDeg: 55,
-  wiebeA: 6.9,
-  wiebeM: 2,
-  intakeClosesDeg: -140,
-  exhaustOpensDeg: 135,
-  blowdownDeg: 14,
-}
-
-/** The gas model begins with sane figures: 2.6 J of heat a cycle and cubic centimetre, a flat trace at one bar. */
+/** The gas model begins with sane figures: usual heat, a flat trace at one bar. */
 function gasOf(model: string, { train }: Scene): CrankTrain['gas'] {
-  const { boreMm: bore = 90, strokeMm: stroke = 80 } = train.cylinderDefaults
   const half = train.cycle === 'two-stroke' ? 180 : 360
-  if (model === 'heat-release')
-    return { ...heatRelease, heatPerCycleJ: Math.round((2.6 * (Math.PI / 4) * bore ** 2 * stroke) / 1000) }
+  if (model === 'heat-release') return usualHeatRelease(train)
   if (model === 'trace') {
     const angleDeg = Array.from({ length: (2 * half) / 10 }, (_, i) => i * 10 - half)
     return { model: 'trace', angleDeg, pressureBar: angleDeg.map(() => 1) }
@@ -92,6 +82,24 @@ const gasModel: RowSpec = {
     changes: (value, scene) => [{ path: ['train', 'gas'], value: gasOf(value, scene) }],
   },
 }
+/** Whose usual ranges the values are held against: looked up by the layout until somebody says otherwise. */
+const engineClass: RowSpec = {
+  is: 'choice',
+  choice: {
+    key: 'engineClass',
+    label: 'Held against',
+    options: ({ train }) => {
+      const guess = guessedClass(train)
+      return [
+        { value: '', label: `${guess ? engineClasses[guess] : 'no class'}, guessed` },
+        ...engineClassNames.map((value) => ({ value, label: engineClasses[value] })),
+        { value: 'none', label: 'no class' },
+      ]
+    },
+    get: ({ train }) => train.engineClass ?? '',
+    changes: (value) => [{ path: ['train', 'engineClass'], value: value || undefined }],
+  },
+}
 const ifHeat = (field: QuantityField) =>
   when(figure(field), ({ train }) => train.gas.model === 'heat-release')
 
@@ -107,6 +115,7 @@ const groups: RowGroup[] = [
       { is: 'table', table: tables.banks },
       { is: 'table', table: tables.throws },
       { is: 'table', table: tables.cylinders },
+      engineClass,
       choice('rotation', 'Turns, from free end', [
         { value: 'clockwise', label: 'clockwise' },
         { value: 'counterclockwise', label: 'counter-clockwise' },
@@ -119,6 +128,7 @@ const groups: RowGroup[] = [
       ballooned(fields.bore, 'liner'),
       ballooned(fields.stroke, 'web'),
       ballooned(fields.rodLength, 'rod'),
+      { is: 'lock', lock: 'displacement' },
       figure(fields.offset),
       figure(fields.compressionRatio),
     ],
@@ -135,7 +145,7 @@ const groups: RowGroup[] = [
       figure(fields.rodInertia),
       figure(fields.bearing),
       figure(fields.oil),
-      { is: 'table', table: tables.cylinderMasses },
+      { is: 'unequal' },
     ],
   },
   {
@@ -151,6 +161,8 @@ const groups: RowGroup[] = [
       figure(fields.webWidth),
       ballooned(fields.counterweightRadius, 'counterweight'),
       figure(fields.compressionHeight),
+      { is: 'lock', lock: 'deck' },
+      figure(fields.deckHeight),
       figure(fields.skirt),
       figure(fields.crankMass),
       ballooned(fields.flywheel, 'flywheel'),
@@ -222,7 +234,11 @@ export const rowKey = (row: RowSpec): string =>
       ? row.table.key
       : row.is === 'trace'
         ? 'gas.trace'
-        : row.field.key
+        : row.is === 'unequal'
+          ? 'table.unequal'
+          : row.is === 'lock'
+            ? `lock.${row.lock}`
+            : row.field.key
 
 export interface NumberedRow {
   row: RowSpec

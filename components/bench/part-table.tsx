@@ -6,9 +6,9 @@ import { NumberField } from '@/components/ui/number-field'
 import type { CrankTrain } from '@/scene/model/crank-train'
 import type { Field } from '@/scene/session/field'
 import { useBench, useResults, useSessionState } from '@/scene/session/react'
+import { splitNames } from '@/scene/session/split-names'
 import type { Column, TableSpec } from './part-tables'
-import { RefusedNote } from './refused-note'
-import { splitNames } from './text-fields'
+import { RefusedNote } from '@/components/figures/refused-note'
 
 /** A list of the document, folded away in the parts list until it is wanted. */
 export function PartTable({ table, number }: { table: TableSpec; number: number }) {
@@ -190,6 +190,8 @@ function Cell({
   const system = useSessionState((state) => state.system)
   const field = fieldOf(table, column, index)
   const refusal = useSessionState((state) => state.refused[field.key])
+  const understood = useSessionState(({ understood: of }) => (of?.key === field.key ? of.text : undefined))
+  const { eventsDeg } = useResults()
   const label = `${column.label} of ${rowName}`
   if (column.is === 'choice')
     return (
@@ -219,7 +221,8 @@ function Cell({
       look="wide"
       label={label}
       text={text}
-      placeholder={(column.is === 'figure' && column.common?.show(scene, system).text) || '–'}
+      placeholder={(column.is === 'figure' && column.otherwise?.(rowName, eventsDeg)) || '–'}
+      understood={understood}
       refused={refusal?.text}
       describedBy={refusal ? `note-${field.key}` : undefined}
       onText={(next) => session.enter(field, next)}

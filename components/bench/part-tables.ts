@@ -1,3 +1,4 @@
+import { formatNumber } from '@/lib/units/format'
 import type { Quantity } from '@/lib/units/quantities'
 import type { UnitName } from '@/lib/units/units'
 import type { CrankTrain } from '@/scene/model/crank-train'
@@ -14,7 +15,8 @@ import {
   removeCylinder,
   rename,
 } from '@/scene/session/structure'
-import { fields, plainField } from './fields'
+import { plainField } from '@/scene/session/plain-field'
+import { angleSlip } from '@/scene/session/usual'
 
 type ListName = 'banks' | 'throws' | 'cylinders' | 'counterweights' | 'balanceShafts' | 'collectors'
 type Events = { id: string; at: number }[]
@@ -24,7 +26,8 @@ export type Column = { key: string; label: string } & (
   | {
       is: 'figure'
       field(index: number): QuantityField
-      /** What holds where a row says nothing of its own. */ common?: QuantityField
+      /** What holds where the field is left empty. */
+      otherwise?(id: string, events: Events): string
     }
   | {
       is: 'choice'
@@ -57,14 +60,16 @@ const figure = (
   label: string,
   quantity: Quantity,
   unit: UnitName,
-  more: { optional?: boolean; at?: (string | number)[]; common?: QuantityField } = {},
+  more: { optional?: boolean; at?: (string | number)[] } = {},
 ): Column => ({
   is: 'figure',
   key,
   label,
-  common: more.common,
   field: (index) =>
-    plainField([list, index, ...(more.at ?? [key])], label, quantity, unit, { optional: more.optional }),
+    plainField([list, index, ...(more.at ?? [key])], label, quantity, unit, {
+      optional: more.optional,
+      ...(quantity === 'angle' && key !== 'firesAtDeg' && { doubt: angleSlip }),
+    }),
 })
 
 const name = (list: 'banks' | 'throws' | 'cylinders'): Column => ({
@@ -83,10 +88,6 @@ const ownName = (list: 'counterweights' | 'balanceShafts' | 'collectors'): Colum
   }),
 })
 
-/** A value that a cylinder may state for itself; `common` is the one for all. */
-const own = (key: string, label: string, common: QuantityField, unit: UnitName): Column =>
-  figure('cylinders', key, label, common.quantity, unit, { optional: true, common })
-
 const pick = (key: 'bank' | 'throw', label: string, list: 'banks' | 'throws'): Column => ({
   is: 'choice',
   key,
@@ -95,6 +96,15 @@ const pick = (key: 'bank' | 'throw', label: string, list: 'banks' | 'throws'): C
   get: ({ train }, index) => train.cylinders[index][key],
   changes: (value, _scene, index) => [{ path: ['train', 'cylinders', index, key], value }],
 })
+
+/** One of its top dead centres; the one that makes the firing most even where it is not stated. */
+const firesAt: Column = {
+  ...figure('cylinders', 'firesAtDeg', 'Fires at', 'angle', '°', { optional: true }),
+  otherwise: (id: string, events: Events) => {
+    const event = events.find((one) => one.id === id)
+    return event ? `${formatNumber(event.at, { decimals: 1 })} taken` : ''
+  },
+} as Column
 
 const NO_MASTER = '–'
 const master: Column = {
@@ -125,23 +135,6 @@ const master: Column = {
       { path: [...place, 'rodLengthMm'], value: Number((rod - knuckleRadiusMm).toFixed(1)) },
     ]
   },
-}
-
-/** The rod of one cylinder: its own mass, the rest as the common one. */
-const ownRod: Column = {
-  is: 'figure',
-  key: 'rod',
-  label: 'Rod',
-  common: fields.rod,
-  field: (index) =>
-    plainField(['cylinders', index, 'rod', 'massKg'], 'Rod', 'mass', 'kg', {
-      optional: true,
-      changes: (value, { train }) => {
-        const rod = train.cylinders[index].rod ?? train.masses.rod
-        const path = ['train', 'cylinders', index, 'rod']
-        return [{ path, value: value === undefined ? undefined : { ...rod, massKg: value } }]
-      },
-    }),
 }
 
 const without =
@@ -190,12 +183,7 @@ export const tables = {
       pick('bank', 'Bank', 'banks'),
       pick('throw', 'Throw', 'throws'),
       figure('cylinders', 'axialMm', 'Along', 'length', 'mm'),
-      figure('cylinders', 'firesAtDeg', 'Fires at', 'angle', '°', { optional: true }),
-      own('boreMm', 'Bore', fields.bore, 'mm'),
-      own('strokeMm', 'Stroke', fields.stroke, 'mm'),
-      own('rodLengthMm', 'Rod', fields.rodLength, 'mm'),
-      own('offsetMm', 'Offset', fields.offset, 'mm'),
-      own('compressionRatio', 'Compression', fields.compressionRatio, ''),
+      firesAt,
       master,
       figure('cylinders', 'knuckleRadius', 'Knuckle at', 'length', 'mm', { at: ['link', 'knuckleRadiusMm'] }),
       figure('cylinders', 'knuckleAngle', 'Knuckle angle', 'angle', '°', { at: ['link', 'knuckleAngleDeg'] }),
@@ -210,19 +198,6 @@ export const tables = {
         : null
     },
     remove: (train, index) => removeCylinder(train, train.cylinders[index].id),
-  },
-  cylinderMasses: {
-    key: 'table.masses',
-    label: 'Masses by cylinder',
-    list: 'cylinders',
-    columns: [
-      name('cylinders'),
-      own('pistonKg', 'Piston', fields.piston, 'kg'),
-      own('pistonPinKg', 'Pin', fields.pistonPin, 'kg'),
-      own('ringsKg', 'Rings', fields.rings, 'kg'),
-      ownRod,
-      own('bigEndBearingKg', 'Bearing', fields.bearing, 'kg'),
-    ],
   },
   counterweights: {
     key: 'table.counterweights',

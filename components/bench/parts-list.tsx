@@ -1,11 +1,14 @@
 'use client'
 
-import { useMemo } from 'react'
-import { Icon } from '@/components/ui/icon'
+import { Fragment, useMemo } from 'react'
+import { Icon, StatusMark } from '@/components/ui/icon'
 import { useBench, useSessionState } from '@/scene/session/react'
-import { softWords } from '@/scene/session/usual'
+import { acknowledgementOf, type Doubt } from '@/scene/model/doubts'
+import { standingDoubts } from '@/scene/session/standing'
+import { DoubtRows } from './doubt-rows'
 import { PartRow } from './part-row'
 import { numberedRows, rowKey } from './part-rows'
+import { rowOfPath } from './row-of-path'
 import { UnitsSwitch } from './units-switch'
 
 interface Props {
@@ -23,7 +26,20 @@ export function PartsList({ onPresets, onSetOut, onDownload, onFile }: Props) {
   const canUndo = useSessionState((state) => state.past.length > 0 || Object.keys(state.refused).length > 0)
   const canRedo = useSessionState((state) => state.future.length > 0)
   const groups = useMemo(() => numberedRows(scene), [scene])
-  const words = useMemo(() => softWords(scene), [scene])
+  const system = useSessionState((state) => state.system)
+  const doubts = useMemo(() => {
+    const rows = groups.flatMap((group) => group.rows)
+    const last = rows.at(-1)!
+    const byRow = new Map<string, Doubt[]>()
+    for (const doubt of standingDoubts(scene.train, system)) {
+      const key = rowOfPath(doubt.path, rows, scene) ?? rowKey(last.row)
+      byRow.set(key, [...(byRow.get(key) ?? []), doubt])
+    }
+    return byRow
+  }, [groups, scene, system])
+  const open = [...doubts].flatMap(([key, list]) =>
+    list.filter((doubt) => !acknowledgementOf(scene.train, doubt)).map((doubt) => ({ key, doubt })),
+  )
   const held = Object.values(refused)
   return (
     <section className="list" aria-label="Parts list">
@@ -54,23 +70,44 @@ export function PartsList({ onPresets, onSetOut, onDownload, onFile }: Props) {
           Presets…
         </button>
       </div>
-      {held.length > 0 ? (
-        <p className="held" role="status">
-          Not taken, the drawing keeps the last value:{' '}
-          {held.map((refusal) => (
-            <a
-              key={refusal.key}
-              href={`#row-${refusal.key}`}
-              onClick={(event) => {
-                event.preventDefault()
-                focusRow(refusal.key)
-              }}
-            >
-              {refusal.label}
-            </a>
-          ))}
-        </p>
-      ) : null}
+      <div className="listnotes">
+        {held.length > 0 ? (
+          <p className="held" role="status">
+            Not taken, the drawing keeps the last value:{' '}
+            {held.map((refusal) => (
+              <a
+                key={refusal.key}
+                href={`#row-${refusal.key}`}
+                onClick={(event) => {
+                  event.preventDefault()
+                  focusRow(refusal.key)
+                }}
+              >
+                {refusal.label}
+              </a>
+            ))}
+          </p>
+        ) : null}
+        {open.length > 0 ? (
+          <p className="held unusual">
+            <span className="st mon">
+              <StatusMark kind="monitor" /> {open.length} unusual:
+            </span>{' '}
+            {open.map(({ key, doubt }) => (
+              <a
+                key={`${doubt.code} ${doubt.path}`}
+                href={`#row-${key}`}
+                onClick={(event) => {
+                  event.preventDefault()
+                  focusRow(key)
+                }}
+              >
+                {doubt.head.replace(/\.$/, '')}
+              </a>
+            ))}
+          </p>
+        ) : null}
+      </div>
       <div className="parts-scroll">
         <table className="parts">
           <thead>
@@ -94,9 +131,16 @@ export function PartsList({ onPresets, onSetOut, onDownload, onFile }: Props) {
                   {name}
                 </th>
               </tr>
-              {rows.map((numbered) => (
-                <PartRow key={rowKey(numbered.row)} {...numbered} word={words[rowKey(numbered.row)]} />
-              ))}
+              {rows.map((numbered) => {
+                const key = rowKey(numbered.row)
+                const unusual = doubts.get(key) ?? []
+                return (
+                  <Fragment key={key}>
+                    <PartRow {...numbered} unusual={unusual.length > 0} />
+                    <DoubtRows row={key} doubts={unusual} />
+                  </Fragment>
+                )
+              })}
             </tbody>
           ))}
         </table>

@@ -3,14 +3,23 @@
 import { useId, useState, type ReactNode } from 'react'
 import { Dialog } from '@/components/ui/dialog'
 import { Segmented } from '@/components/ui/segmented'
+import { plainNumber, quantityText } from '@/lib/units/format'
 import { parseQuantity } from '@/lib/units/parse'
 import type { Quantity, System } from '@/lib/units/quantities'
 import { fromSi } from '@/lib/units/units'
 import type { CrankTrain } from '@/scene/model/crank-train'
+import type { Scene } from '@/scene/model/scene'
 import { judge } from '@/scene/session/judge'
+import { keepFitting, type Fitted } from '@/scene/session/keep-fitting'
 import { useSessionState } from '@/scene/session/react'
 import { setOut, type SettingOut } from '@/scene/session/set-out'
+import { throwPitch } from '@/scene/session/structure'
 
+interface Answer {
+  document: CrankTrain
+  /** What of the old train was taken over, and what was not. */
+  fitted: Fitted | null
+}
 type Problem = { field: string; message: string }
 interface Typed {
   title: string
@@ -21,9 +30,33 @@ interface Typed {
   bore: string
   stroke: string
   pitch: string
+  values: 'keep' | 'fresh'
 }
 
-const start: Typed = {
+/** The dialog begins with what stands on the bench, so that one more throw is one more angle. */
+function begun({ train }: Scene, system: System): Typed {
+  const { cylinders, throws, banks, cylinderDefaults: common } = train
+  const angles = (list: { angleDeg: number }[]) => list.map(({ angleDeg }) => plainNumber(angleDeg)).join('/')
+  const size = (mm: number | undefined, otherwise: string) =>
+    mm === undefined
+      ? otherwise
+      : quantityText(mm / 1000, 'length', system, { decimals: system === 'si' ? 2 : 4 })
+  const linked = cylinders.some(({ link }) => link)
+  const inTurn = banks.length > 1 && cylinders.length === throws.length
+  return {
+    ...fresh,
+    title: train.title,
+    cycle: train.cycle,
+    arrangement: linked ? 'master-rod' : inTurn ? 'banks-in-turn' : 'every-bank',
+    banks: angles(banks),
+    throws: angles(throws.toSorted((one, other) => one.axialMm - other.axialMm)),
+    bore: size(common.boreMm, fresh.bore),
+    stroke: size(common.strokeMm, fresh.stroke),
+    pitch: throwPitch(train) === undefined ? '' : size(throwPitch(train), ''),
+  }
+}
+
+const fresh: Typed = {
   title: 'New crank train',
   cycle: 'four-stroke',
   arrangement: 'every-bank',
@@ -32,10 +65,11 @@ const start: Typed = {
   bore: '86 mm',
   stroke: '86 mm',
   pitch: '',
+  values: 'keep',
 }
 
 /** Reads the form; the answer is a document that runs, or what is wrong and where. */
-function read(typed: Typed, system: System): { document: CrankTrain } | Problem {
+function read(typed: Typed, system: System, old: CrankTrain): Answer | Problem {
   const angles = (text: string) => {
     const out: number[] = []
     for (const part of text.split('/')) {
@@ -67,9 +101,12 @@ function read(typed: Typed, system: System): { document: CrankTrain } | Problem 
   if (!(boreMm > 0)) return { field: 'bore', message: 'The bore must be above 0.' }
   if (!(strokeMm > 0)) return { field: 'stroke', message: 'The stroke must be above 0.' }
   const { title, cycle, arrangement } = typed
-  const document = setOut({ title, cycle, arrangement, bankAngles, throwAngles, boreMm, strokeMm, pitchMm })
+  const laid = setOut({ title, cycle, arrangement, bankAngles, throwAngles, boreMm, strokeMm, pitchMm })
+  const sized = { ...old.cylinderDefaults, boreMm, strokeMm }
+  const fitted = typed.values === 'keep' ? keepFitting({ ...old, cylinderDefaults: sized }, laid) : null
+  const document = fitted?.document ?? laid
   const [issue] = judge(document)
-  return issue ? { field: 'throws', message: `${issue.message} ${issue.fix}` } : { document }
+  return issue ? { field: 'throws', message: `${issue.message} ${issue.fix}` } : { document, fitted }
 }
 
 const cylindersOf = ({ arrangement, banks, throws }: Typed) => {
@@ -80,7 +117,8 @@ const cylindersOf = ({ arrangement, banks, throws }: Typed) => {
 /** A new train from its layout alone: the proportions are the program's until real ones are typed. */
 export function SetOutDialog({ onClose, onDone }: { onClose(): void; onDone(document: CrankTrain): void }) {
   const system = useSessionState((state) => state.system)
-  const [typed, setTyped] = useState(start)
+  const scene = useSessionState((state) => state.scene)
+  const [typed, setTyped] = useState(() => begun(scene, system))
   const [problem, setProblem] = useState<Problem | null>(null)
   const id = useId()
   const set = <K extends keyof Typed>(key: K, value: Typed[K]) => {
@@ -112,8 +150,10 @@ export function SetOutDialog({ onClose, onDone }: { onClose(): void; onDone(docu
       ) : null}
     </div>
   )
+  const ahead = read(typed, system, scene.train)
+  const fitted = 'document' in ahead ? ahead.fitted : null
   const submit = () => {
-    const answer = read(typed, system)
+    const answer = read(typed, system, scene.train)
     if ('document' in answer) onDone(answer.document)
     else setProblem(answer)
   }
@@ -172,14 +212,40 @@ export function SetOutDialog({ onClose, onDone }: { onClose(): void; onDone(docu
         {field('bore', 'Bore')}
         {field('stroke', 'Stroke')}
         {field('pitch', 'Throw pitch', 'by the bore where left empty')}
+        <div className="lf full">
+          <span className="lab">Everything else</span>
+          <Segmented
+            label="Everything else"
+            value={typed.values}
+            options={[
+              { value: 'keep', label: 'as it is, where it fits' },
+              { value: 'fresh', label: 'usual proportions of the bore' },
+            ]}
+            onChange={(values) => set('values', values)}
+          />
+        </div>
         <button type="submit" className="vh" tabIndex={-1}>
           Set out
         </button>
       </form>
-      <p className="cap">
-        Rods, masses, journals and gas begin with usual proportions of the bore, and the firing order with the
-        most even one that the throws allow. Everything can be typed over afterwards.
-      </p>
+      {fitted ? (
+        <div className="fitted" role="status">
+          <p>
+            <b>Stays:</b> {fitted.kept.join('; ')}.
+          </p>
+          {fitted.reset.length > 0 ? (
+            <p>
+              <b>Is set anew or dropped:</b> {fitted.reset.join('; ')}. One step back brings all of it again.
+            </p>
+          ) : null}
+        </div>
+      ) : null}
+      {fitted ? null : (
+        <p className="cap">
+          Rods, masses, journals and gas begin with usual proportions of the bore, and the firing order with
+          the most even one that the throws allow. Everything can be typed over afterwards.
+        </p>
+      )}
     </Dialog>
   )
 }

@@ -37,16 +37,18 @@ const views: { value: NamedView; label: string }[] = [
 const ROOM_FOR_PANES = 980
 
 interface Props {
+  id: string
   onRenderer(kind: RendererKind, reason: string): void
 }
 
-export function StagePanel({ onRenderer }: Props) {
+export function StagePanel({ id, onRenderer }: Props) {
   const { session, clock } = useBench()
   const { model, speedRpm, document: train } = useResults()
   const view = useSessionState((state) => state.scene.view)
   const system = useSessionState((state) => state.system)
   const picked = useSessionState((state) => state.picked)
   const lit = useSessionState((state) => state.lit)
+  const pointed = useSessionState((state) => state.pointed)
   const refused = useSessionState((state) => state.refused)
   const scene = useSessionState((state) => state.scene)
   const stages = useRef(new Set<Stage>())
@@ -66,29 +68,18 @@ export function StagePanel({ onRenderer }: Props) {
     return () => observer.disconnect()
   }, [])
 
+  const sectionAxial = view.sectionAxialMm === null ? null : view.sectionAxialMm / 1000
   const look = useMemo<StageLook>(() => {
     const row = lit ? partsOfRow(model.rig, scene, lit) : []
     return {
       hidden: view.hidden,
       ghost: view.ghost,
-      sectionAxial: view.sectionAxialMm === null ? null : view.sectionAxialMm / 1000,
       overlays: view.overlays,
-      lit: picked ? [picked, ...row] : row,
+      lit: [...(picked ? [picked] : pointed), ...row],
       balloons: view.overlays.labels ? balloonsOf(model.rig, scene, lit, new Set(Object.keys(refused))) : [],
       forceUnit: system === 'us' ? 'lbf' : 'N',
     }
-  }, [
-    view.hidden,
-    view.ghost,
-    view.sectionAxialMm,
-    view.overlays,
-    picked,
-    lit,
-    refused,
-    model.rig,
-    scene,
-    system,
-  ])
+  }, [view.hidden, view.ghost, view.overlays, picked, pointed, lit, refused, model.rig, scene, system])
 
   // The stage moves its own camera; it is told one only when another document is opened.
   const base = useSessionState((state) => state.base)
@@ -102,7 +93,7 @@ export function StagePanel({ onRenderer }: Props) {
   const describe = `${train.title}, ${train.cylinders.length} cylinders. Arrow keys turn it, plus and minus zoom, Home frames it, brackets step the crank, space runs it, 1 to 6 are the named views.`
   const over = train.operating?.maxRpm
   return (
-    <section className="stage" aria-label="Drawing" ref={host}>
+    <section className="stage" id={id} aria-label="Drawing" ref={host}>
       <div className="stage-head">
         <Segmented
           label="Named views"
@@ -129,6 +120,7 @@ export function StagePanel({ onRenderer }: Props) {
             clock={clock}
             model={model}
             look={look}
+            sectionAxial={sectionAxial}
             camera={given.camera}
             renderer={renderer}
             label="Crank train, moving drawing"
@@ -155,6 +147,7 @@ export function StagePanel({ onRenderer }: Props) {
                   clock={clock}
                   model={model}
                   look={look}
+                  sectionAxial={sectionAxial}
                   renderer={renderer}
                   pane={pane}
                   label={pane === 'end' ? 'End view' : 'Side view'}

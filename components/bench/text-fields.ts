@@ -1,7 +1,10 @@
 import { formatNumber } from '@/lib/units/format'
 import { parseQuantity } from '@/lib/units/parse'
 import type { Scene } from '@/scene/model/scene'
-import type { Field, Reading } from '@/scene/session/field'
+import type { Doubt, Field, Reading } from '@/scene/session/field'
+import { orderSlip } from '@/scene/session/order-slip'
+import { splitNames } from '@/scene/session/split-names'
+import { angleSlip } from '@/scene/session/usual'
 
 /** A field of several values in one line: `0/90/270/180`, `1-8-4-3-6-5-7-2`. */
 export interface TextField extends Field {
@@ -19,7 +22,8 @@ function angleList(list: 'banks' | 'throws', label: string, word: string): TextF
     key: list,
     label,
     show: ({ train }) => train[list].map((item) => angle(item.angleDeg)).join('/'),
-    read(text, { train }): Reading {
+    read(text, scene): Reading {
+      const { train } = scene
       const parts = text.split('/')
       if (parts.length !== train[list].length)
         return {
@@ -28,13 +32,18 @@ function angleList(list: 'banks' | 'throws', label: string, word: string): TextF
           mends: [],
         }
       const changes = []
+      let turned: Doubt | null = null
       for (const [i, part] of parts.entries()) {
         const parsed = parseQuantity(part, 'angle', '°')
         if (!parsed.ok) return { ok: false, message: parsed.message, mends: [] }
         const value = parsed.unit === '°' ? parsed.number : (parsed.value * 180) / Math.PI
+        const doubt = angleSlip(value, scene, { number: parsed.number, unit: parsed.unit, system: 'si' })
+        const wrapped = () =>
+          parts.map((each, k) => (k === i ? angle(((value % 360) + 360) % 360) : each.trim()))
+        if (doubt && !turned) turned = { ...doubt, mends: [{ ...doubt.mends[0], text: wrapped().join('/') }] }
         changes.push({ path: ['train', list, i, 'angleDeg'], value })
       }
-      return { ok: true, changes }
+      return { ok: true, changes, doubt: turned }
     },
   }
 }
@@ -44,13 +53,6 @@ const count = (n: number, word: string) => `${n} ${word}${n === 1 ? '' : 's'}`
 export const bankAngles = angleList('banks', 'Bank angles', 'bank')
 export const throwAngles = angleList('throws', 'Throws', 'throw')
 
-/** Names in a row: hyphens, commas or spaces between. */
-export const splitNames = (text: string) =>
-  text
-    .split(/[\s,;\u2013\u2212-]+/)
-    .map((name) => name.trim())
-    .filter(Boolean)
-
 export const firingOrder: TextField = {
   key: 'firingOrder',
   label: 'Firing order',
@@ -58,6 +60,8 @@ export const firingOrder: TextField = {
   read: (text, { train }) => {
     // Names may themselves hold a hyphen: then the document's own spelling is looked for first.
     const order = text.trim() === train.firingOrder.join('-') ? train.firingOrder : splitNames(text)
+    const slip = orderSlip(order, train)
+    if (slip) return { ok: false, ...slip }
     return { ok: true, changes: [{ path: ['train', 'firingOrder'], value: order }] }
   },
 }

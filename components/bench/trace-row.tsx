@@ -3,7 +3,7 @@
 import { useId, useState } from 'react'
 import type { Field } from '@/scene/session/field'
 import { useBench, useSessionState } from '@/scene/session/react'
-import { RefusedNote } from './refused-note'
+import { RefusedNote } from '@/components/figures/refused-note'
 
 /** Two columns, angle and absolute pressure in bar, as they come out of a spreadsheet or an indicator. */
 const traceField: Field = {

@@ -1,16 +1,19 @@
 'use client'
 
-import { useEffect, useEffectEvent, useSyncExternalStore } from 'react'
+import { useEffect, useSyncExternalStore } from 'react'
 import type { Clock } from '@/scene/session/clock'
 import { useBench } from '@/scene/session/react'
+import { pageTicker } from '@/scene/stage/ticker'
 
-/** Runs `move` at once and after every change of the clock. For DOM by reference: it must not set state. */
-export function useClock(move: (clock: Clock) => void): void {
-  const { clock } = useBench()
-  const onMove = useEffectEvent(() => move(clock))
+/** Keeps the clock going also where no drawing does: on the other leaves. */
+export function useTicking(clock: Clock): void {
   useEffect(() => {
-    onMove()
-    return clock.subscribe(onMove)
+    const seat = pageTicker().join(clock, () => false)
+    const stop = clock.subscribe(seat.wake)
+    return () => {
+      stop()
+      seat.leave()
+    }
   }, [clock])
 }
 
@@ -37,15 +40,3 @@ export function useReducedMotion(): boolean {
 }
 
 const REDUCED = '(prefers-reduced-motion: reduce)'
-
-export const degrees = (angle: number) => (angle * 180) / Math.PI
-export const radians = (angle: number) => (angle * Math.PI) / 180
-
-/** Moves the clock to the next whole step in a direction, and stands still there. */
-export function stepClock(clock: Clock, byDeg: number): void {
-  clock.pause()
-  const at = degrees(clock.angle)
-  const size = Math.abs(byDeg)
-  const snapped = Math.round((at + byDeg) / size) * size
-  clock.setAngle(radians(Number(snapped.toFixed(4))))
-}

@@ -1,9 +1,10 @@
 'use client'
 
 import { useState, type ReactNode } from 'react'
+import { download, fileStem } from '@/components/ui/download'
 import { useSlip } from '@/components/ui/slips'
 import { snapshot } from '@/scene/session/draft'
-import { readFile, sceneFileName } from '@/scene/session/file'
+import { readFile } from '@/scene/session/file'
 import type { Issue } from '@/scene/session/judge'
 import { useBench } from '@/scene/session/react'
 import { FileDialog } from './file-dialog'
@@ -23,14 +24,8 @@ export function useFiles(): Files {
   return {
     download() {
       const scene = snapshot(session, clock)
-      const address = URL.createObjectURL(
-        new Blob([JSON.stringify(scene, null, 2)], { type: 'application/json' }),
-      )
-      const link = document.createElement('a')
-      link.href = address
-      link.download = sceneFileName(scene)
-      link.click()
-      URL.revokeObjectURL(address)
+      const content = new Blob([JSON.stringify(scene, null, 2)], { type: 'application/json' })
+      download(`${fileStem(scene.train.title)}.json`, content)
     },
     async bringIn(file) {
       const answer = readFile(await file.text())

@@ -2,6 +2,7 @@
 
 import { useDeferredValue, useState } from 'react'
 import { useRouter } from 'next/navigation'
+import { Segmented } from '@/components/ui/segmented'
 import { Slips, useSlip } from '@/components/ui/slips'
 import { Tabs } from '@/components/ui/tabs'
 import { call, Refusal } from '@/lib/contracts/call'
@@ -9,7 +10,7 @@ import type * as contracts from '@/lib/contracts/scenes'
 import type { Operation } from '@/lib/auth/access'
 import { RenameDialog } from './rename-dialog'
 import { SceneRow, type SceneAct } from './scene-row'
-import { useScenes, type SceneState } from './use-scenes'
+import { useScenes, type SceneLayout, type SceneState } from './use-scenes'
 
 interface Props {
   workshop: string
@@ -23,6 +24,14 @@ const states: { value: SceneState; label: string }[] = [
   { value: 'archived', label: 'Archived' },
 ]
 
+const layouts: { value: SceneLayout; label: string }[] = [
+  { value: 'all', label: 'All' },
+  { value: 'single', label: 'Single' },
+  { value: 'in-line', label: 'In line' },
+  { value: 'two-banks', label: 'Two banks' },
+  { value: 'more-banks', label: 'More banks' },
+]
+
 export const SceneRegister = (props: Props) => (
   <Slips>
     <Register {...props} />
@@ -32,10 +41,12 @@ export const SceneRegister = (props: Props) => (
 function Register({ workshop, may }: Props) {
   const [state, setState] = useState<SceneState>('current')
   const [search, setSearch] = useState('')
+  const [layout, setLayout] = useState<SceneLayout>('all')
   const [renaming, setRenaming] = useState<Summary | null>(null)
   const { scenes, loading, error, more, refresh } = useScenes(
     workshop,
     state,
+    layout,
     useDeferredValue(search.trim()),
   )
   const slip = useSlip()
@@ -104,6 +115,7 @@ function Register({ workshop, may }: Props) {
             onChange={(event) => setSearch(event.target.value)}
           />
         </div>
+        <Segmented label="Layout" value={layout} options={layouts} onChange={setLayout} />
       </div>
       <Tabs<SceneState> label="State" value={state} tabs={states} onChange={setState}>
         {error ? (
@@ -123,6 +135,7 @@ function Register({ workshop, may }: Props) {
                 <th>No.</th>
                 <th>Drawing</th>
                 <th>Title</th>
+                <th className="fire2">Firing</th>
                 <th className="r">Displacement</th>
                 <th className="r">Version</th>
                 <th>Last change</th>
@@ -139,7 +152,7 @@ function Register({ workshop, may }: Props) {
           </table>
         ) : (
           <div className="state">
-            <Nothing loading={loading} search={search} state={state} />
+            <Nothing loading={loading} search={search} layout={layout} state={state} />
           </div>
         )}
         {more ? (
@@ -165,7 +178,14 @@ function Register({ workshop, may }: Props) {
   )
 }
 
-function Nothing({ loading, search, state }: { loading: boolean; search: string; state: SceneState }) {
+interface NothingProps {
+  loading: boolean
+  search: string
+  layout: SceneLayout
+  state: SceneState
+}
+
+function Nothing({ loading, search, layout, state }: NothingProps) {
   if (loading) return <p>Setting out the register</p>
   if (search)
     return (
@@ -173,6 +193,14 @@ function Nothing({ loading, search, state }: { loading: boolean; search: string;
         <b>Nothing by that title.</b>
         <br />
         Try fewer letters, or look among the {state === 'current' ? 'archived' : 'current'} scenes.
+      </p>
+    )
+  if (layout !== 'all')
+    return (
+      <p>
+        <b>No scene of this layout.</b>
+        <br />
+        Choose another, or all of them.
       </p>
     )
   if (state === 'archived') return <p>Nothing is archived.</p>

@@ -24,7 +24,6 @@ const litres = (cc: number) =>
 
 /** One line of the drawing register. */
 export function SceneRow({ scene, number, acts, onAct }: Props) {
-  const { cylinderCount: cylinders } = scene
   return (
     <tr>
       <td className="fig no2">{String(number).padStart(2, '0')}</td>
@@ -34,10 +33,11 @@ export function SceneRow({ scene, number, acts, onAct }: Props) {
       <th scope="row">
         <Link href={`/bench?scene=${scene.id}`}>{scene.title}</Link>
         <span className="cap">
-          {cylinders} {cylinders === 1 ? 'cylinder' : 'cylinders'}
+          {scene.layout}
           {scene.message ? `, ${scene.message}` : ''}
         </span>
       </th>
+      <td className="fire2">{scene.firing}</td>
       <td className="n disp">
         {litres(scene.displacementCc)}
         <span className="u"> L</span>

@@ -2,14 +2,15 @@
 
 import useSWRInfinite from 'swr/infinite'
 import { addressOf, readAddress } from '@/lib/contracts/call'
-import type { listScenes } from '@/lib/contracts/scenes'
+import type { listScenes, sceneLayouts } from '@/lib/contracts/scenes'
 import type { AnswerOf } from '@/lib/contracts/operation'
 
 export type SceneState = 'current' | 'archived'
+export type SceneLayout = 'all' | (typeof sceneLayouts)[number]
 type Page = AnswerOf<typeof listScenes>
 
 /** The register, a page at a time as the database cuts it. */
-export function useScenes(workshop: string, state: SceneState, search: string) {
+export function useScenes(workshop: string, state: SceneState, layout: SceneLayout, search: string) {
   const { data, error, isLoading, isValidating, size, setSize, mutate } = useSWRInfinite<Page, Error>(
     (index: number, before: Page | null) =>
       before && !before.next
@@ -17,7 +18,11 @@ export function useScenes(workshop: string, state: SceneState, search: string) {
         : addressOf(
             '/api/v1/scenes',
             {},
-            { workshop, state, search, after: index ? before?.next : undefined },
+            {
+              ...{ workshop, state, search },
+              layout: layout === 'all' ? undefined : layout,
+              after: index ? before?.next : undefined,
+            },
           ),
     readAddress,
     // what was archived a moment ago is already in the other list: each is read anew when it is shown

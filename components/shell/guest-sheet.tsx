@@ -1,5 +1,5 @@
 import type { ReactNode } from 'react'
-import { Edges } from './sheet'
+import { Edges } from './edges'
 import { ThemeSwitch } from './theme-switch'
 
 interface Props {

@@ -1,4 +1,5 @@
 import type { ReactNode } from 'react'
+import { Edges } from './edges'
 import { SheetNav, type SheetName, type SheetPerson } from './sheet-nav'
 import { ThemeSwitch } from './theme-switch'
 
@@ -27,29 +28,5 @@ export function Sheet({ current, person, className, signOut, children }: Props) 
       </main>
       <ThemeSwitch />
     </div>
-  )
-}
-
-/** Zone marks at the sides and the foot. */
-export function Edges() {
-  const side = (name: string) => (
-    <div className={`edge ${name}`} aria-hidden="true">
-      <span />
-      <span />
-      <span className="centre" />
-      <span />
-      <span />
-    </div>
-  )
-  return (
-    <>
-      {side('edge-l')}
-      {side('edge-r')}
-      <div className="edge edge-b" aria-hidden="true">
-        {[1, 2, 3, 4, 5, 6, 7, 8].map((zone) => (
-          <span key={zone}>{zone}</span>
-        ))}
-      </div>
-    </>
   )
 }

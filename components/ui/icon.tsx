@@ -10,6 +10,8 @@ const strokes = {
   undo: <path d="M5.5 2.5 2 6l3.5 3.5M2 6h6.5a3.5 3.5 0 0 1 0 7H6" />,
   redo: <path d="M8.5 2.5 12 6 8.5 9.5M12 6H5.5a3.5 3.5 0 0 0 0 7H8" />,
   reverse: <path d="M4.5 1.5 1.5 4.5l3 3M1.5 4.5H12M9.5 6.5l3 3-3 3M12.5 9.5H2" />,
+  locked: <path d="M3 6.5h8v6H3zM4.8 6.5V4.2a2.2 2.2 0 0 1 4.4 0v2.3" />,
+  unlocked: <path d="M3 6.5h8v6H3zM4.8 6.5V4.2a2.2 2.2 0 0 1 4.2-.9" />,
   down: <path d="M2.5 5 7 9.5 11.5 5" />,
 }
 

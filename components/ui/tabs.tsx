@@ -10,9 +10,14 @@ interface Props<T extends string> {
   children: ReactNode
 }
 
-/** Datum tabs: the current word stands on the datum triangle. The children are the current panel. */
-export function Tabs<T extends string>({ label, value, tabs, onChange, children }: Props<T>) {
-  const id = useId()
+/** The row of datum tabs alone: the current word stands on the datum triangle. Panels are named by `panelId`. */
+export function TabList<T extends string>({
+  id,
+  label,
+  value,
+  tabs,
+  onChange,
+}: Omit<Props<T>, 'children'> & { id: string }) {
   const list = useRef<HTMLDivElement>(null)
   const move = (event: KeyboardEvent) => {
     const at = tabs.findIndex((tab) => tab.value === value)
@@ -24,24 +29,34 @@ export function Tabs<T extends string>({ label, value, tabs, onChange, children 
     list.current?.querySelectorAll('button')[next].focus()
   }
   return (
+    <div ref={list} className="datum" role="tablist" aria-label={label} onKeyDown={move}>
+      {tabs.map((tab) => (
+        <button
+          key={tab.value}
+          type="button"
+          role="tab"
+          id={`${id}-${tab.value}`}
+          aria-controls={panelId(id)}
+          aria-selected={tab.value === value}
+          tabIndex={tab.value === value ? 0 : -1}
+          onClick={() => onChange(tab.value)}
+        >
+          {tab.label}
+        </button>
+      ))}
+    </div>
+  )
+}
+
+export const panelId = (id: string) => `${id}-panel`
+
+/** Datum tabs over the current panel. */
+export function Tabs<T extends string>({ children, ...tabs }: Props<T>) {
+  const id = useId()
+  return (
     <>
-      <div ref={list} className="datum" role="tablist" aria-label={label} onKeyDown={move}>
-        {tabs.map((tab) => (
-          <button
-            key={tab.value}
-            type="button"
-            role="tab"
-            id={`${id}-${tab.value}`}
-            aria-controls={`${id}-panel`}
-            aria-selected={tab.value === value}
-            tabIndex={tab.value === value ? 0 : -1}
-            onClick={() => onChange(tab.value)}
-          >
-            {tab.label}
-          </button>
-        ))}
-      </div>
-      <div className="datum-panel" role="tabpanel" id={`${id}-panel`} aria-labelledby={`${id}-${value}`}>
+      <TabList id={id} {...tabs} />
+      <div className="datum-panel" role="tabpanel" id={panelId(id)} aria-labelledby={`${id}-${tabs.value}`}>
         {children}
       </div>
     </>

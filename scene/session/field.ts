@@ -1,9 +1,12 @@
 import { convert, type UnitName } from '@/lib/units/units'
 import { formatNumber, plainNumber } from '@/lib/units/format'
-import { parseQuantity, type Mend } from '@/lib/units/parse'
+import { parseQuantity, type Mend as TextMend } from '@/lib/units/parse'
 import { scaleFor, type Quantity, type Scale, type System } from '@/lib/units/quantities'
 import type { Scene } from '@/scene/model/scene'
 import type { Change } from './path'
+
+/** An offered repair: this text in the field, or these changes of the document. */
+export type Mend = TextMend | { label: string; changes: Change[] }
 
 /** A value that can be read and is probably not what was meant: the drawing keeps the last one and asks. */
 export interface Doubt {
@@ -37,24 +40,37 @@ export interface QuantityFieldOptions {
   quantity: Quantity
   /** The unit of the document's own number. */
   documentUnit: UnitName
+  path?: string
   get(scene: Scene): number | undefined
   changes(value: number | undefined, scene: Scene): Change[]
   optional?: boolean
-  /** Why a value can never be, in words, or null; what depends on other values is judged with the document. */
-  refuse?(value: number): string | null
+  /** Why a value can never be, or null; what depends on other values is judged with the document. */
+  refuse?(value: number, typed: Typed): { message: string; mends: Mend[] } | null
   /** Judges a value in document units as typed with no suffix; see usual.ts. */
-  doubt?(value: number, scene: Scene, typed: { number: number; unit: UnitName; system: System }): Doubt | null
+  doubt?(value: number, scene: Scene, typed: Typed): Doubt | null
+}
+
+/** What was read of a text, before it is turned into the document's unit. */
+export interface Typed {
+  number: number
+  unit: UnitName
+  system: System
 }
 
 export interface QuantityField extends Field {
   quantity: Quantity
+  /** Where the document holds the number, dotted from the train, where it is one place. */
+  path?: string
   get(scene: Scene): number | undefined
   show(scene: Scene, system: System): Shown
+  changes: QuantityFieldOptions['changes']
+  refuse: QuantityFieldOptions['refuse']
+  doubt: QuantityFieldOptions['doubt']
 }
 
 /** A field for one figure of the document. */
 export function quantityField(options: QuantityFieldOptions): QuantityField {
-  const { key, label, quantity, documentUnit, get, changes, optional, refuse, doubt } = options
+  const { key, label, quantity, documentUnit, path, get, changes, optional, refuse, doubt } = options
   const scaleOf = (scene: Scene, system: System): Scale => {
     const value = get(scene)
     return scaleFor(value === undefined ? 0 : convert(value, documentUnit, baseUnit), quantity, system)
@@ -63,7 +79,11 @@ export function quantityField(options: QuantityFieldOptions): QuantityField {
     key,
     label,
     quantity,
+    path,
     get,
+    changes,
+    refuse,
+    doubt,
     show(scene, system) {
       const value = get(scene)
       const scale = scaleOf(scene, system)
@@ -76,13 +96,13 @@ export function quantityField(options: QuantityFieldOptions): QuantityField {
       const parsed = parseQuantity(text, quantity, shown)
       if (!parsed.ok) return { ok: false, message: parsed.message, mends: parsed.mends }
       const value = convert(parsed.number, parsed.unit, documentUnit)
-      const refused = refuse?.(value)
-      if (refused) return { ok: false, message: refused, mends: [] }
+      const typed = { number: parsed.number, unit: parsed.unit, system }
+      const refused = refuse?.(value, typed)
+      if (refused) return { ok: false, ...refused }
       const understood =
         parsed.unit === shown && !/[^\d.+-]/.test(text.trim())
           ? undefined
           : plainNumber(Number(convert(parsed.number, parsed.unit, shown).toPrecision(6)))
-      const typed = { number: parsed.number, unit: parsed.unit, system }
       return { ok: true, changes: changes(value, scene), understood, doubt: doubt?.(value, scene, typed) }
     },
   }

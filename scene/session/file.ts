@@ -40,11 +40,3 @@ const refused = (path: string, code: string, message: string, fix: string): File
   ok: false,
   issues: [{ path, code, message, fix }],
 })
-
-export const sceneFileName = (scene: Scene) =>
-  `${
-    scene.train.title
-      .replace(/[^\p{L}\p{N}]+/gu, '-')
-      .replace(/^-|-$/g, '')
-      .toLowerCase() || 'scene'
-  }.json`

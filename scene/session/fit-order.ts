@@ -8,7 +8,7 @@ import { toTrain } from '@/scene/model/to-train'
 const SEARCHED = 14
 
 /** Exact top dead centre of each cylinder in degrees, 0 … 360. */
-function topCentres(document: CrankTrain): { id: string; at: number }[] {
+export function topCentres(document: CrankTrain): { id: string; at: number }[] {
   const train = toTrain({ ...document, firingOrder: [] })
   return deadCentres(rodPaths(train)).map(({ top }, i) => ({
     id: train.cylinders[i].id,

@@ -1,10 +1,13 @@
 import { createStore, type StoreApi } from 'zustand/vanilla'
-import type { Mend } from '@/lib/units/parse'
 import type { System } from '@/lib/units/quantities'
 import type { Scene } from '@/scene/model/scene'
-import type { Field } from './field'
+import type { Field, Mend } from './field'
 import { applyChanges, type Change } from './path'
 import { judge, type Issue } from './judge'
+import { noLocks, withFollowers, type Locks } from './locks'
+import { mendsFor } from './mends'
+import { doubtBrought } from './standing'
+import type { Mend as Standing } from '@/scene/model/doubts/doubt'
 
 /** Typed text that the document did not take, beside the last good document. */
 export interface Refusal {
@@ -50,11 +53,14 @@ export interface SessionState {
   /** Consecutive edits under one gesture are one step; `seal` ends it. */
   gesture: string | null
   system: System
+  locks: Locks
   /** What was understood of the text being typed, where that is not plain from the text. */
   understood: { key: string; text: string } | null
   /** Part picked on the drawing, and the field whose row is lit. */
   picked: string | null
   lit: string | null
+  /** Parts that something else on the page is about, lit until a part is picked. */
+  pointed: readonly string[]
 }
 
 export interface Session extends StoreApi<SessionState> {
@@ -74,8 +80,10 @@ export interface Session extends StoreApi<SessionState> {
   takeUp(left: Pick<SessionState, 'scene' | 'base' | 'saved'>): void
   markSaved(saved: Saved | null): void
   setSystem(system: System): void
+  setLock(lock: keyof Locks, on: boolean): void
   pick(part: string | null): void
   light(key: string | null): void
+  point(parts: readonly string[]): void
 }
 
 const STEPS = 200
@@ -97,9 +105,11 @@ export function createSession(start: SessionStart): Session {
     future: [],
     gesture: null,
     system: start.system ?? 'si',
+    locks: noLocks,
     understood: null,
     picked: null,
     lit: null,
+    pointed: [],
   }))
   const { getState: get, setState: set } = store
 
@@ -168,10 +178,23 @@ export function createSession(start: SessionStart): Session {
       const reading = field.read(text, state.scene, state.system)
       if (!reading.ok)
         return refuse({ head: 'Not understood.', message: reading.message, mends: reading.mends })
-      const { changes, doubt } = reading
+      const { doubt } = reading
+      const changes = withFollowers(state.scene, reading.changes, state.locks)
       if (doubt && !force) return refuse({ ...doubt, changes, keep: doubt.keep })
       const taken = tryTogether(state.scene, changes, others)
-      if (taken.issues) return refuse({ ...wordsOf(taken.issues), changes })
+      if (taken.issues) {
+        const attempt = { key: field.key, changes, scene: state.scene, system: state.system }
+        return refuse({ ...wordsOf(taken.issues), mends: mendsFor(taken.issues, attempt), changes })
+      }
+      const brought = force ? undefined : doubtBrought(state.scene.train, taken.scene.train, state.system)
+      if (brought)
+        return refuse({
+          head: brought.head,
+          message: brought.message,
+          mends: brought.mend ? [withMend(brought.mend, changes)] : [],
+          changes,
+          keep: `Keep ${text.trim()}`,
+        })
       commit(taken.scene, field.key, taken.refused)
       set({ understood: reading.understood ? { key: field.key, text: reading.understood } : null })
     },
@@ -198,15 +221,24 @@ export function createSession(start: SessionStart): Session {
         future: [],
         picked: null,
         lit: null,
+        pointed: [],
       })
     },
     takeUp: (left) => set({ ...left, refused: {}, past: [], future: [], gesture: null }),
     markSaved: (saved) => set({ saved }),
     setSystem: (system) => set({ system }),
-    pick: (picked) => set({ picked }),
+    setLock: (lock, on) => set({ locks: { ...get().locks, [lock]: on } }),
+    pick: (picked) => set({ picked, pointed: [] }),
     light: (lit) => set({ lit }),
+    point: (pointed) => set({ pointed, picked: null }),
   }
 }
+
+/** What a doubt offers comes after what was typed: throws and the order that fits them go in together. */
+const withMend = ({ label, changes: more }: Standing, typed: Change[]): Mend => ({
+  label,
+  changes: [...typed, ...more.map(({ path, value }) => ({ path: ['train', ...path], value }))],
+})
 
 type Taken = { issues: Issue[] } | { issues?: undefined; scene: Scene; refused: Record<string, Refusal> }
 

@@ -12,6 +12,8 @@ export interface SettingOut {
   strokeMm: number
   /** Between neighbouring throws; by the bore where not given. */
   pitchMm?: number
+  /** How far the second bank's pin stands ahead of the first's where each has its own on a throw. */
+  splitDeg?: number
 }
 
 /**
@@ -19,7 +21,7 @@ export interface SettingOut {
  * cubic centimetre of bore cubed, journals and webs of a car engine. Common practice, from memory; to be replaced by real ones.
  */
 export function setOut(layout: SettingOut): CrankTrain {
-  const { boreMm, strokeMm, bankAngles, throwAngles, arrangement } = layout
+  const { boreMm, strokeMm, bankAngles, throwAngles, arrangement, splitDeg = 0 } = layout
   const cube = (boreMm / 10) ** 3 / 1000 // kg at 1 g/cm³ of bore cubed
   const round = (value: number, decimals = 1) => Number(value.toFixed(decimals))
   const perThrow = arrangement === 'banks-in-turn' ? 1 : bankAngles.length
@@ -30,13 +32,25 @@ export function setOut(layout: SettingOut): CrankTrain {
   const rodKg = 0.75 * cube
   const knuckleRadiusMm = round(0.26 * rodLengthMm)
 
-  const throws = throwAngles.map((angleDeg, i) => ({
+  const unbalanceKgMm = round(0.0023 * cube * boreMm * strokeMm, 4)
+  const bays = throwAngles.map((angleDeg, i) => ({
     id: `${i + 1}`,
     angleDeg,
     axialMm: round(i * pitch - middle),
-    unbalanceKgMm: round(0.0023 * cube * boreMm * strokeMm, 4),
+    unbalanceKgMm,
   }))
-  const cylinders = throws.flatMap((pin, t) =>
+  const throws =
+    splitDeg === 0
+      ? bays
+      : bays.flatMap((bay) =>
+          [0, 1].map((k) => ({
+            id: `${bay.id}${'ab'[k]}`,
+            angleDeg: (bay.angleDeg + k * splitDeg + 360) % 360,
+            axialMm: round(bay.axialMm + (k - 0.5) * side),
+            unbalanceKgMm: unbalanceKgMm / 2,
+          })),
+        )
+  const cylinders = bays.flatMap((pin, t) =>
     Array.from({ length: perThrow }, (_, k) => {
       const bank = arrangement === 'banks-in-turn' ? t % bankAngles.length : k
       const id = `${t * perThrow + k + 1}`
@@ -53,22 +67,23 @@ export function setOut(layout: SettingOut): CrankTrain {
               link: { master, knuckleRadiusMm, knuckleAngleDeg: bankAngles[k] - bankAngles[0] },
             }
           : {}
-      return { id, bank: letter(bank), throw: pin.id, axialMm: round(place), ...link }
+      const own = splitDeg === 0 ? pin.id : `${pin.id}${'ab'[k]}`
+      return { id, bank: letter(bank), throw: own, axialMm: round(place), ...link }
     }),
   )
   const webs = 0.3 * boreMm
-  const rotating = perThrow * (rodKg * 0.72 + 0.058 * cube) * (strokeMm / 2) + throws[0].unbalanceKgMm
+  const rotating = perThrow * (rodKg * 0.72 + 0.058 * cube) * (strokeMm / 2) + unbalanceKgMm
   const radiusMm = round(0.56 * boreMm)
-  const counterweights = throws.flatMap((pin) =>
+  const counterweights = bays.flatMap((pin) =>
     [-1, 1].map((end) => ({
       id: `${pin.id}${end < 0 ? 'F' : 'D'}`,
       axialMm: round(pin.axialMm + end * webs),
-      angleDeg: (pin.angleDeg + 180) % 360,
+      angleDeg: (pin.angleDeg + splitDeg / 2 + 180) % 360,
       massKg: round(rotating / 2 / radiusMm, 4),
       radiusMm,
     })),
   )
-  const mains = Array.from({ length: throws.length + 1 }, (_, i) => ({
+  const mains = Array.from({ length: bays.length + 1 }, (_, i) => ({
     id: `M${i + 1}`,
     axialMm: round((i - 0.5) * pitch - middle),
   }))

@@ -23,7 +23,7 @@ test('at 360 px the bench works without sideways scroll', async ({ page }) => {
 
 test('a finger finds its targets: buttons of the sheet are 44 px high', async ({ page }) => {
   const bench = benchPage(page)
-  await bench.open('?preset=v8x-5000', true)
+  await bench.open('?preset=v8x-5000', 'running')
   for (const name of ['Pause', 'On 1 degree', 'Show', 'Presets…', 'Save version 1']) {
     const box = await page.getByRole('button', { name, exact: true }).boundingBox()
     expect(Math.round(box!.height), name).toBeGreaterThanOrEqual(44)

@@ -19,13 +19,35 @@ test('an unknown and a withdrawn link show the same neutral page, which no robot
   const texts = new Set<string>()
   for (const address of [withdrawn, '/s/not-a-token-that-anybody-was-given']) {
     const answer = await guest.goto(address)
+    expect(answer?.status()).toBe(404)
     expect(answer?.headers()['cache-control']).toContain('no-store')
     texts.add(await guest.locator('main').innerText())
-    expect(await guest.locator('meta[name="robots"]').getAttribute('content')).toContain('noindex')
+    // the framework says so once more by itself
+    expect(await guest.locator('meta[name="robots"]').first().getAttribute('content')).toContain('noindex')
     expect(await guest.locator('meta[name="referrer"]').getAttribute('content')).toBe('no-referrer')
   }
   expect([...texts]).toHaveLength(1)
   expect([...texts][0]).toContain('This link is not available.')
+})
+
+test('a link’s page counts itself once somebody has it before them, not when it is only fetched', async ({
+  page,
+  person,
+  guest,
+}) => {
+  expect(person.name).not.toBe('')
+  const scene = await saveScene(page, 'i3-1000')
+  const address = await shareScene(page, scene)
+  const opened = async () => {
+    const { links } = await (await page.request.get(`/api/v1/scenes/${scene}/share-links`)).json()
+    return links[0].opened
+  }
+  expect((await page.request.get(address)).status()).toBe(200)
+  expect(await opened()).toBe(0)
+  const told = guest.waitForResponse((answer) => answer.url().endsWith('/openings'))
+  await guest.goto(address)
+  expect((await told).status()).toBe(204)
+  expect(await opened()).toBe(1)
 })
 
 test('a pinned link keeps its version while the latest one moves on', async ({ page, person, guest }) => {

@@ -6,8 +6,6 @@ import { NumberField } from '@/components/ui/number-field'
 import { Segmented } from '@/components/ui/segmented'
 import { SliderRule } from '@/components/ui/slider-rule'
 import { Tabs } from '@/components/ui/tabs'
-import { Chart } from '@/components/ui/chart'
-import { ticks } from '@/components/ui/ticks'
 
 afterEach(cleanup)
 
@@ -116,55 +114,5 @@ describe('<SliderRule>', () => {
     fireEvent.keyDown(slider, { key: 'ArrowRight' })
     fireEvent.keyDown(slider, { key: 'PageDown' })
     expect(onStep.mock.calls).toEqual([[1], [-5]])
-  })
-})
-
-describe('ticks(low, high, n)', () => {
-  it('are round and enclose the span', () => {
-    expect(ticks(-90, 908, 3)).toEqual([-500, 0, 500, 1000])
-    expect(ticks(0, 29.1, 3)).toEqual([0, 10, 20, 30])
-    expect(ticks(0, 0, 3).length).toBeGreaterThan(1)
-  })
-})
-
-describe('<Chart>', () => {
-  const props = {
-    summary: 'Moment over 720 degrees',
-    xs: [0, 180, 360, 540],
-    xEnd: 720,
-    xName: 'Crank angle',
-    xUnit: '°',
-    yUnit: 'N m',
-    series: [{ name: 'total', look: 'res' as const, values: [0, 1, 0, -1] }],
-    format: (value: number) => value.toFixed(1),
-  }
-  it('carries its summary, and opens a table of the same figures', () => {
-    render(<Chart {...props} />)
-    expect(screen.getByRole('img', { name: 'Moment over 720 degrees' })).toBeTruthy()
-    expect(screen.queryByRole('table')).toBeNull()
-    fireEvent.click(screen.getByRole('button', { name: 'Table' }))
-    expect(screen.getAllByRole('row')).toHaveLength(5)
-    expect(screen.getByRole('columnheader', { name: 'total, N m' })).toBeTruthy()
-  })
-  it('follows the cursor without drawing itself again', () => {
-    let move: ((x: number) => void) | null = null
-    const renders = vi.fn(props.format)
-    render(
-      <Chart
-        {...props}
-        format={renders}
-        follow={(to) => {
-          move = to
-          return () => {}
-        }}
-      />,
-    )
-    const before = renders.mock.calls.length
-    move!(360)
-    const cursor = document.querySelector('.chart-cursor')!
-    const half = cursor.getAttribute('transform')
-    move!(720)
-    expect(cursor.getAttribute('transform')).not.toBe(half)
-    expect(renders.mock.calls.length).toBe(before)
   })
 })

@@ -4,7 +4,8 @@ import { presetById, presets } from '@/scene/model/presets'
 import type { Scene } from '@/scene/model/scene'
 import { createClock } from '@/scene/session/clock'
 import { readKept, snapshot, writeKept } from '@/scene/session/draft'
-import { readFile, sceneFileName } from '@/scene/session/file'
+import { fileStem } from '@/components/ui/download'
+import { readFile } from '@/scene/session/file'
 import { fitOrder } from '@/scene/session/fit-order'
 import { judge } from '@/scene/session/judge'
 import { getAt, setAt } from '@/scene/session/path'
@@ -225,6 +226,6 @@ describe('readFile', () => {
     if (!answer.ok) expect(answer.issues[0].fix).not.toBe('')
   })
   it('the name of the file is the title of the sheet', () => {
-    expect(sceneFileName(scene)).toBe('45-v-twin-1-6-l-common-pin.json')
+    expect(fileStem(scene.train.title)).toBe('45-v-twin-1-6-l-common-pin')
   })
 })

@@ -1,0 +1,37 @@
+'use client'
+
+import { intervalWords } from '@/components/figures/interval-words'
+import { Leaf } from '@/components/figures/leaf'
+import { Caution } from '@/components/figures/note'
+import { formatNumber } from '@/lib/units/format'
+import { useResults } from '@/scene/session/react'
+import { CollectorSections } from './collector-section'
+import { OrderSection } from './order-section'
+import { PhasingSection } from './phasing-section'
+
+const whole = (value: number) => formatNumber(value, { decimals: 0 })
+
+/** The leaf where the firing order, the throws that allow it and the collectors are chosen. */
+export function FiringLeaf() {
+  const { analysis, document, train, speedRpm } = useResults()
+  const { intervalsDeg, even, alternatesBanks } = analysis.firing
+  const banks =
+    document.banks.length > 1
+      ? alternatesBanks
+        ? ' Banks alternate all the way round.'
+        : ' Some bank fires twice in a row.'
+      : ''
+  const turns = train.cycle / (2 * Math.PI)
+  const perSecond = formatNumber((train.cylinders.length * speedRpm) / 60 / turns, { decimals: 1 })
+  return (
+    <Leaf
+      title="Firing"
+      sentence={`${document.firingOrder.join('-')} fires ${even ? 'evenly' : 'unevenly'}, ${intervalWords(intervalsDeg, even)} degrees apart.${banks} At ${whole(speedRpm)} rpm that is ${perSecond} a second.`}
+    >
+      <OrderSection />
+      <CollectorSections />
+      <PhasingSection />
+      <Caution />
+    </Leaf>
+  )
+}

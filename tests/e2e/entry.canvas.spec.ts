@@ -1,0 +1,92 @@
+import { benchPage } from './bench-page'
+import { expect, test } from './support/test'
+
+test('an unusual value is taken, kept with a reason, and asked about again after undo', async ({ page }) => {
+  const bench = benchPage(page)
+  await bench.open('?preset=i4-2000')
+  await bench.type('Piston, bare', '600 g')
+  await expect(bench.field('Piston, bare')).toHaveValue('600.0')
+  await expect(page.getByText('1 unusual:')).toBeVisible()
+  await expect(page.locator('.doubt')).toContainText('Above the usual 220 to 480 g of a car engine.')
+
+  await page.getByRole('button', { name: 'Keep it…' }).click()
+  await page.getByRole('textbox', { name: 'Why Piston 600 g is kept' }).fill('steel, weighed')
+  await page.keyboard.press('Enter')
+  await expect(page.locator('.doubt')).toContainText('Reason: steel, weighed')
+  await expect(page.getByText('1 unusual:')).toHaveCount(0)
+  await page.getByRole('button', { name: 'Undo', exact: true }).click()
+  await expect(page.getByText('1 unusual:')).toBeVisible()
+  await page.getByRole('button', { name: 'Use 480 g' }).click()
+  await expect(bench.field('Piston, bare')).toHaveValue('480.0')
+  await expect(page.locator('.doubt')).toHaveCount(0)
+})
+
+test('a slip is held with its typed text and mended by one press', async ({ page }) => {
+  const bench = benchPage(page)
+  await bench.open('?preset=i4-2000')
+  await bench.type('Rod, centres', '577')
+  await expect(bench.note).toContainText('577 mm here; usual is 118 to 237 mm')
+  await expect(bench.field('Rod, centres')).toHaveValue('577')
+  await page.getByRole('button', { name: 'Use 5.77 in = 147 mm' }).click()
+  await expect(bench.note).toHaveCount(0)
+  await expect(bench.field('Rod, centres')).toHaveValue(/^146\.5/)
+})
+
+test('held displacement lets the stroke follow the bore, in one step', async ({ page }) => {
+  const bench = benchPage(page)
+  await bench.open('?preset=i4-2000')
+  const lock = page.getByRole('switch', { name: /^Hold displacement/ })
+  await lock.focus()
+  await page.keyboard.press('Space')
+  await expect(lock).toContainText('held')
+  await bench.type('Bore', '88')
+  await expect(bench.field('Stroke')).toHaveValue(/^82\.1/)
+  await expect(lock).toHaveAccessibleName(/2,001 cm³/)
+  await page.getByRole('button', { name: 'Undo', exact: true }).click()
+  await expect(bench.field('Bore')).toHaveValue('85.2')
+  await expect(bench.field('Stroke')).toHaveValue('87.6')
+})
+
+test('one cylinder differs, shows so, and goes back', async ({ page }) => {
+  const bench = benchPage(page)
+  await bench.open('?preset=i4-2000')
+  await page.getByRole('button', { name: 'Unequal parts, none' }).click()
+  await page.getByRole('combobox', { name: 'Cylinder', exact: true }).selectOption('3')
+  await page.getByRole('button', { name: 'This cylinder differs' }).click()
+  await bench.type('Piston, bare of cylinder 3', '320')
+  await expect(page.getByText('except 3')).toBeVisible()
+  await page.getByRole('button', { name: 'Reset Piston, bare of cylinder 3' }).click()
+  await expect(page.getByText('All cylinders are alike.')).toBeVisible()
+})
+
+test('a cylinder more keeps what fits, lists what is reset, and one step back brings all of it again', async ({
+  page,
+}) => {
+  const bench = benchPage(page)
+  await bench.open('?preset=i4-2000')
+  await page.getByRole('button', { name: 'Set out…' }).click()
+  const dialog = page.getByRole('dialog', { name: 'Set out a crank train' })
+  await dialog.getByLabel('Throw angles, free end first').fill('0/144/216/288/72')
+  await expect(dialog.getByRole('status')).toContainText('8 counterweights')
+  await dialog.getByRole('button', { name: 'Set out', exact: true }).last().click()
+  await expect(bench.field('Piston, bare')).toHaveValue('318.0')
+  await page.getByRole('button', { name: 'Undo', exact: true }).click()
+  await expect(bench.field('Throws')).toHaveValue('0/180/180/0')
+})
+
+test('behind a figure: formula, values put in, assumptions and source, by key alone', async ({ page }) => {
+  const bench = benchPage(page)
+  await bench.open('?preset=v8x-5000')
+  await page.getByRole('tab', { name: 'Fits' }).click()
+  const figure = page.getByRole('button', { name: /^All cylinders, 5,001 cm³, behind this figure/ })
+  await figure.focus()
+  await page.keyboard.press('Enter')
+  const dialog = page.getByRole('dialog', { name: /^Behind a figure/ })
+  await expect(dialog).toContainText('pi / 4 × bore² × true stroke × cylinders / 1000')
+  await expect(dialog).toContainText('pi / 4 × 95² × 88.2 × 8 / 1000 = 5,001 cm³')
+  await expect(dialog).toContainText('rigid crank, constant speed, version 1.0')
+  await bench.expectNoBarriers()
+  await page.keyboard.press('Escape')
+  await expect(dialog).toHaveCount(0)
+  await expect(figure).toBeFocused()
+})
