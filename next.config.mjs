@@ -49,9 +49,11 @@ const config = {
   poweredByHeader: false,
   typedRoutes: false,
   images: { unoptimized: true },
-  serverExternalPackages: ['@node-rs/argon2', 'postgres', 'sharp'],
+  serverExternalPackages: ['@node-rs/argon2', 'pdfkit', 'postgres', 'sharp'],
   outputFileTracingRoot: root,
   turbopack: { root },
+  // under `next dev` the program is opened by the address that start prints
+  allowedDevOrigins: ['127.0.0.1'],
   headers: async () => [
     { source: '/:path*', headers: everywhere },
     { source: '/s/:path*', headers: capability },

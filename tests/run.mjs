@@ -1,4 +1,4 @@
-import { mkdtempSync, rmSync } from 'node:fs'
+import { closeSync, mkdtempSync, openSync, readFileSync, rmSync } from 'node:fs'
 import { tmpdir } from 'node:os'
 import { dirname, join } from 'node:path'
 import { fileURLToPath } from 'node:url'
@@ -10,11 +10,10 @@ const root = join(dirname(fileURLToPath(import.meta.url)), '..')
 
 async function main() {
   await ensurePackages(root)
-  const { bench, stages } = await import('./stages.mjs')
+  const { bench, installPrograms, lanes, stages } = await import('./stages.mjs')
   const all = { ...stages, bench }
   const words = process.argv.slice(2)
   const chosen = words.filter((word) => all[word])
-  const names = chosen.length ? chosen : Object.keys(stages)
   const filters = words.filter((word) => !all[word])
   if (filters.length && !chosen.length) {
     throw new Refusal(`npm test [-- stage … [part of a file name …]]\nStages: ${Object.keys(all).join(', ')}`)
@@ -22,18 +21,38 @@ async function main() {
 
   const folder = mkdtempSync(join(tmpdir(), 'counterthrow-run-'))
   const results = []
+  const run = async (name, stdio) => {
+    const began = Date.now()
+    let counts
+    try {
+      counts = await all[name]({ root, folder, filters, stdio })
+    } catch (error) {
+      console.error(error instanceof Refusal ? error.message : error)
+      counts = { passed: 0, failed: 1 }
+    }
+    results.push({ name, ...counts, seconds: (Date.now() - began) / 1000 })
+  }
+  /** Keeps what a stage says until it has ended, so that two lanes do not speak at once. */
+  const runQuietly = async (name) => {
+    const log = join(folder, `${name}.log`)
+    const output = openSync(log, 'w')
+    await run(name, ['ignore', output, output])
+    closeSync(output)
+    console.log(`\n━━ ${name}\n${readFileSync(log, 'utf8')}`)
+  }
   try {
-    for (const name of names) {
-      console.log(`\n━━ ${name}`)
-      const began = Date.now()
-      let counts
-      try {
-        counts = await all[name]({ root, folder, filters })
-      } catch (error) {
-        console.error(error instanceof Refusal ? error.message : error)
-        counts = { passed: 0, failed: 1 }
+    if (chosen.length)
+      for (const name of chosen) {
+        console.log(`\n━━ ${name}`)
+        await run(name)
       }
-      results.push({ name, ...counts, seconds: (Date.now() - began) / 1000 })
+    else {
+      await installPrograms()
+      await Promise.all(
+        lanes.map(async (lane) => {
+          for (const name of lane) await runQuietly(name)
+        }),
+      )
     }
   } finally {
     await stopEverything()

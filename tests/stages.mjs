@@ -1,6 +1,7 @@
 import { existsSync, mkdirSync, readFileSync } from 'node:fs'
 import { join } from 'node:path'
 import { ensureBuild, nextEnvironment, nextProgram } from '../db/server/build.mjs'
+import { serverPrograms } from '../db/server/binaries.mjs'
 import { beganAt, freePort, run, startGroup, until } from '../db/server/processes.mjs'
 import { runCanaries } from './quality/canaries.mjs'
 import { ensureChromium } from './support/chromium.mjs'
@@ -13,8 +14,9 @@ const tool = (name) => join('node_modules/.bin', name)
 /** A gate is one check: every command must end well. */
 const gate =
   (...commands) =>
-  async ({ root }) => {
-    for (const [program, ...args] of commands) await run(program, args, { cwd: root, env: environment })
+  async ({ root, stdio }) => {
+    for (const [program, ...args] of commands)
+      await run(program, args, { cwd: root, env: environment, stdio })
     return pass
   }
 
@@ -39,7 +41,7 @@ function countVitest({ testResults }) {
 /** Vitest's tests of these projects; skipped ones count as failed, and so does having none. */
 const vitest =
   (...projects) =>
-  ({ root, folder, filters }) => {
+  ({ root, folder, filters, stdio }) => {
     const report = join(folder, `${projects.join('-')}.json`)
     const args = [
       'run',
@@ -48,16 +50,16 @@ const vitest =
       ...projects.flatMap((name) => ['--project', name]),
     ]
     args.push('--reporter=default', '--reporter=json', `--outputFile.json=${report}`, ...filters)
-    return reported(report, tool('vitest'), args, { cwd: root, env: environment }, countVitest)
+    return reported(report, tool('vitest'), args, { cwd: root, env: environment, stdio }, countVitest)
   }
 
 /** The program as people start it, with data and a port of its own; `stop()` tells whether it went cleanly. */
-async function startProgram({ root, folder }) {
+async function startProgram({ root, folder, stdio }) {
   const port = await freePort()
   const dataFolder = join(folder, 'data')
   mkdirSync(dataFolder)
   const env = { ...environment, PORT: String(port), COUNTERTHROW_DATA: dataFolder, RATE_LIMIT: 'off' }
-  const program = startGroup(process.execPath, ['db/server/start.mjs'], { cwd: root, env })
+  const program = startGroup(process.execPath, ['db/server/start.mjs'], { cwd: root, env, stdio })
   const address = `http://127.0.0.1:${port}`
   const up = await until(
     () =>
@@ -87,10 +89,10 @@ const countPlaywright = ({ stats, errors }) => ({
 })
 
 /** Playwright's tests against the real program, in Debian's browser, with WebGL and without. */
-async function e2e({ root, folder, filters }, settings = {}) {
+async function e2e({ root, folder, filters, stdio }, settings = {}) {
   const chromium = await ensureChromium()
   await ensureBuild(root, distDir)
-  const program = await startProgram({ root, folder })
+  const program = await startProgram({ root, folder, stdio })
   const report = join(folder, 'playwright.json')
   const env = {
     ...environment,
@@ -100,7 +102,7 @@ async function e2e({ root, folder, filters }, settings = {}) {
     ...settings,
   }
   const args = ['test', '-c', 'tests/quality/playwright.config.ts', '--reporter=list,json', ...filters]
-  const counts = await reported(report, tool('playwright'), args, { cwd: root, env }, countPlaywright)
+  const counts = await reported(report, tool('playwright'), args, { cwd: root, env, stdio }, countPlaywright)
   const clean = await program.stop()
   if (!clean) console.error('The program did not stop cleanly.')
   return clean ? { ...counts, passed: counts.passed + 1 } : { ...counts, failed: counts.failed + 1 }
@@ -142,6 +144,18 @@ export const stages = {
     return pass
   },
   e2e: (asked) => e2e(asked),
+}
+
+/** All stages, for two cores: what needs no build, beside what is built and run. */
+export const lanes = [
+  ['format', 'lint', 'canaries', 'cycles', 'unit', 'golden', 'rendering', 'integration'],
+  ['types', 'pure-types', 'build', 'e2e'],
+]
+
+/** What both lanes would otherwise install at once. */
+export async function installPrograms() {
+  await ensureChromium()
+  await serverPrograms()
 }
 
 /** Figures rather than checks, asked for by name: speeds, frame times, page weights. */

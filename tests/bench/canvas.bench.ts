@@ -1,4 +1,5 @@
 import { bench, describe } from 'vitest'
+import { fine } from '@/scene/canvas/raster/fine'
 import { paint } from '@/scene/canvas/raster/paint'
 import { createRaster, setSize } from '@/scene/canvas/raster/raster'
 import { addSample, allSamples, showSamples } from '@/scene/canvas/raster/refine'
@@ -15,7 +16,7 @@ const turn = (zoom: number) =>
   Array.from({ length: pictures }, (_, i) => shotOf(rig, { angleDeg: (720 * i) / pictures, zoom }))
 
 function rasterOf(width: number, height: number) {
-  const raster = createRaster(rig, vellum)
+  const raster = createRaster(rig, vellum, fine)
   setSize(raster, width, height, height / 720)
   return raster
 }
@@ -38,7 +39,7 @@ function paintTurn(name: string, frames: RasterFrame[], width: number, height: n
   })
 }
 
-describe(`cross-plane V8, ${createRaster(rig, vellum).flat.faceCount} triangles`, () => {
+describe(`cross-plane V8, ${createRaster(rig, vellum, fine).flat.faceCount} triangles`, () => {
   paintTurn('1280 × 720, a third of the picture', turn(0.75), 1280, 720)
   paintTurn('1280 × 720, framed', turn(1), 1280, 720)
   paintTurn('1280 × 720, zoomed twice', turn(1.5), 1280, 720)
