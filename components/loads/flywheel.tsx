@@ -65,7 +65,9 @@ export function Flywheel({ energy, speed }: Props) {
         <button
           type="button"
           className="btn sm"
-          onClick={() => session.edit([{ path: ['inertia', 'flywheelKgM2'], value: neededFlywheel }])}
+          onClick={() =>
+            session.edit([{ path: ['train', 'inertia', 'flywheelKgM2'], value: neededFlywheel }])
+          }
         >
           Take {inertiaText(neededFlywheel, system, { significant: 4 })} as the flywheel
         </button>

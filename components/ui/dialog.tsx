@@ -1,6 +1,6 @@
 'use client'
 
-import { useEffect, useId, useRef, type ReactNode } from 'react'
+import { useId, useLayoutEffect, useRef, type ReactNode } from 'react'
 
 interface Props {
   title: string
@@ -16,7 +16,8 @@ interface Props {
 export function Dialog({ title, onClose, about, actions, wide, children }: Props) {
   const id = useId()
   const dialog = useRef<HTMLDialogElement>(null)
-  useEffect(() => {
+  // closed while it is still in the page, so that the browser gives the focus back
+  useLayoutEffect(() => {
     const element = dialog.current
     element?.showModal()
     return () => element?.close()

@@ -58,6 +58,7 @@ test('the sheet that a share link opens moves under its limit of scripts', async
   await signUp(page, stranger)
   const address = await shareScene(page, await saveScene(page, 'v8x-5000', { playing: true }))
   const scripts = watchScripts(guest)
+  await guest.emulateMedia({ reducedMotion: 'no-preference' })
   await guest.goto(address, { waitUntil: 'networkidle' })
   const moving = await firstMove(guest)
   // the second step has come: forces, marks and the drive

@@ -50,11 +50,17 @@ test('model, picture and figures are saved', async ({ page }) => {
   expect(table.bytes.toString()).toContain('rigid crank, constant speed')
 })
 
-test('a sheet that cannot be fetched says so, and what to do', async ({ page }) => {
+test('a sheet that the server will not make now says why, and what to do', async ({ page }) => {
   const leaf = await openPaper(page, 'i3-1000')
-  await page.route('**/api/v1/design-sheets', (route) => route.abort())
+  await page.route('**/api/v1/design-sheets', (route) =>
+    route.fulfill({
+      status: 429,
+      contentType: 'application/problem+json',
+      body: JSON.stringify({ detail: 'Too many sheets at once.', cure: 'Wait a minute.' }),
+    }),
+  )
   await leaf.getByRole('button', { name: 'Save the design sheet (PDF)' }).click()
-  await expect(leaf).toContainText('The server cannot be reached. Check the connection and try again')
+  await expect(leaf).toContainText('Too many sheets at once. Wait a minute.')
 })
 
 test('the leaf has no fault that rules of accessibility find', async ({ page }) => {

@@ -40,7 +40,7 @@ export default defineConfig({
     viewport: { width: 1440, height: 900 },
     // an engine that runs all the time would take half the machine; tests of motion ask for it
     contextOptions: { reducedMotion: 'reduce' },
-    trace: 'retain-on-failure',
+    // a trace of every page would cost as much as the tests; what failed is drawn and described anyway
     screenshot: 'only-on-failure',
   },
   projects: [
