@@ -1,5 +1,6 @@
 'use client'
 
+import { behindClearance } from '@/components/figures/behind-clearance'
 import { Figures, Note } from '@/components/figures/note'
 import { useClearances } from '@/components/figures/use-clearances'
 import { StatusMark } from '@/components/ui/icon'
@@ -15,7 +16,7 @@ const looks = {
 
 /** The clearance that is tightest against its limit, and the other kinds' least below it. */
 export function ClearanceNote() {
-  const { clearances } = useClearances()
+  const { clearances, sizes, results } = useClearances()
   const system = useSessionState((state) => state.system)
   // the tightest of every kind, tightest first
   const kinds = clearances.filter(
@@ -37,9 +38,10 @@ export function ClearanceNote() {
       }
     >
       <Figures
-        rows={kinds.map(({ name, gap, labels }, i) => ({
-          name: i === 0 ? `${labels[0]}, ${inSentence(labels[1])}` : name,
-          figure: formatQuantity(gap, 'length', system),
+        rows={kinds.map((clearance, i) => ({
+          name: i === 0 ? `${clearance.labels[0]}, ${inSentence(clearance.labels[1])}` : clearance.name,
+          figure: formatQuantity(clearance.gap, 'length', system),
+          behind: behindClearance(clearance, results.train, sizes),
         }))}
       />
     </Note>

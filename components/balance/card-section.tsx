@@ -2,6 +2,7 @@
 
 import { useMemo, useState } from 'react'
 import { flushSync } from 'react-dom'
+import { BehindFigure } from '@/components/figures/behind'
 import { LeafSection } from '@/components/figures/leaf'
 import { Caution } from '@/components/figures/note'
 import {
@@ -71,7 +72,9 @@ export function CardSection() {
           <DocumentField field={ofAll} />
           {rods > 1 ? <DocumentField field={ofOne(rods)} /> : null}
         </div>
-        <p className="cap">{factorWords(document.balanceFactor, rods)}</p>
+        <p className="cap">
+          <FactorWords factor={document.balanceFactor} rods={rods} pin={card.throw} />
+        </p>
         <Caution />
         <button type="button" className="btn sm card-print" onClick={print}>
           Print the card
@@ -81,10 +84,24 @@ export function CardSection() {
   )
 }
 
-function factorWords(factor: number, rods: number): string {
+function FactorWords({ factor, rods, pin }: { factor: number; rods: number; pin: string }) {
   const percent = (value: number) => `${plainNumber(100 * value)} %`
-  if (rods < 2) return 'One rod on the pin: both ways of quoting a balance factor are the same here.'
-  return `Two ways of quoting one weight: ${percent(factor)} of all ${rods} cylinders on the pin is ${percent(factorOfOne(factor, rods))} of one.`
+  const quoted = (
+    <BehindFigure
+      behind={{ figure: 'balance-factor', throw: pin }}
+      label={`Balance factor, ${percent(factor)}`}
+    >
+      {percent(factor)}
+    </BehindFigure>
+  )
+  return rods < 2 ? (
+    <>One rod on the pin: both ways of quoting a balance factor are the same here, {quoted}.</>
+  ) : (
+    <>
+      Two ways of quoting one weight: {quoted} of all {rods} cylinders on the pin is{' '}
+      {percent(factorOfOne(factor, rods))} of one.
+    </>
+  )
 }
 
 const sameWeights = (a: BobWeightCard, b: BobWeightCard) =>
@@ -164,7 +181,14 @@ function CardTable({ card }: { card: BobWeightCard }) {
           <th scope="row" colSpan={3}>
             Bob-weight
           </th>
-          <td className="n">{mass(card.total)}</td>
+          <td className="n">
+            <BehindFigure
+              behind={{ figure: 'bob-weight', throw: card.throw }}
+              label={`Bob-weight, ${mass(card.total)}`}
+            >
+              {mass(card.total)}
+            </BehindFigure>
+          </td>
         </tr>
       </tfoot>
     </table>

@@ -1,6 +1,8 @@
 'use client'
 
 import { useMemo, useState } from 'react'
+import { behindCell } from '@/components/figures/behind-cell'
+import type { FigureId } from '@/lib/mechanics/explain/explain'
 import { LeafSection } from '@/components/figures/leaf'
 import { SpeedWords } from '@/components/figures/speed-words'
 import { DataTable } from '@/components/ui/data-table'
@@ -52,16 +54,40 @@ export function OrderSection() {
         />
       </div>
       <div className="order-tables">
-        {kinds.map((kind) => (
-          <DataTable
-            key={kind}
-            table={of === 'engine' ? orderTable(kind, rows, system) : layoutTable(kind, rows)}
-          />
-        ))}
+        {kinds.map((kind) => {
+          if (of === 'layout') return <DataTable key={kind} table={layoutTable(kind, rows)} />
+          const table = orderTable(kind, rows, system)
+          return (
+            <DataTable
+              key={kind}
+              table={table}
+              figure={behindCell(table, (row, column) => behindOrder(kind, rows[row], column))}
+            />
+          )
+        })}
       </div>
       <p className="cap">{of === 'engine' ? engineWords : layoutWords(layout, system)}</p>
     </LeafSection>
   )
+}
+
+const behindColumns: Record<(typeof bothKinds)[number], (FigureId | undefined)[]> = {
+  force: [undefined, 'order-forward', 'order-backward', 'order-long-axis', 'order-short-axis'],
+  couple: [
+    undefined,
+    'order-couple-forward',
+    'order-couple-backward',
+    'order-couple-long-axis',
+    'order-couple-short-axis',
+  ],
+}
+
+/** The textbook's first terms stand beside the exact figures and have nothing behind them of their own. */
+function behindOrder(kind: (typeof bothKinds)[number], { name, order: { order } }: OrderRow, column: number) {
+  const figure = behindColumns[kind][column]
+  return figure && !name.endsWith('first term')
+    ? { figure, order, bare: name.endsWith('bare crank') }
+    : undefined
 }
 
 const engineWords =

@@ -1,5 +1,6 @@
 'use client'
 
+import { BehindFigure, type Behind } from '@/components/figures/behind'
 import type { Phasor } from '@/lib/mechanics/balance'
 import { formatQuantity, quantityText } from '@/lib/units/format'
 import type { System } from '@/lib/units/quantities'
@@ -10,6 +11,8 @@ export interface PlaneRow {
   place: number
   unbalance: Phasor
   permissible: number | null
+  /** What stands behind the two, where it is the engine as it is. */
+  behind?: { residual: Behind; permissible: Behind }
 }
 
 /** What reads as nothing points nowhere. */
@@ -43,18 +46,24 @@ export function PlanesTable({ rows, caption }: { rows: PlaneRow[]; caption: stri
         </tr>
       </thead>
       <tbody>
-        {rows.map(({ name, place, unbalance, permissible }) => (
+        {rows.map(({ name, place, unbalance, permissible, behind }) => (
           <tr key={name}>
             <th scope="row">{name}</th>
             <td className="n">{quantityText(place, 'length', system)}</td>
-            <td className="n">{quantityText(unbalance.size, 'unbalance', system)}</td>
+            <td className="n">
+              <Pressed behind={behind?.residual} text={quantityText(unbalance.size, 'unbalance', system)} />
+            </td>
             <td className="n">
               {isNothing(unbalance, system)
                 ? '–'
                 : quantityText((unbalance.angle + 2 * Math.PI) % (2 * Math.PI), 'angle', system)}
             </td>
             <td className="n">
-              {permissible === null ? '–' : quantityText(permissible, 'unbalance', system)}
+              {permissible === null ? (
+                '–'
+              ) : (
+                <Pressed behind={behind?.permissible} text={quantityText(permissible, 'unbalance', system)} />
+              )}
             </td>
             <td>
               {permissible === null ? null : unbalance.size <= permissible ? (
@@ -69,3 +78,6 @@ export function PlanesTable({ rows, caption }: { rows: PlaneRow[]; caption: stri
     </table>
   )
 }
+
+const Pressed = ({ behind, text }: { behind?: Behind; text: string }) =>
+  behind ? <BehindFigure behind={behind}>{text}</BehindFigure> : text

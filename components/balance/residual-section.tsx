@@ -69,6 +69,7 @@ export function ResidualSection() {
             place: places[i],
             unbalance,
             permissible: allowed![i],
+            behind: behindPlane(places, i, grade),
           }))}
         />
       ) : (
@@ -80,8 +81,16 @@ export function ResidualSection() {
       )}
       <Figures
         rows={[
-          { name: 'Static, whole', figure: formatQuantity(residual.static.size, 'unbalance', system) },
-          { name: 'Couple', figure: formatQuantity(residual.couple.size, 'coupleUnbalance', system) },
+          {
+            name: 'Static, whole',
+            figure: formatQuantity(residual.static.size, 'unbalance', system),
+            behind: 'residual-static',
+          },
+          {
+            name: 'Couple',
+            figure: formatQuantity(residual.couple.size, 'coupleUnbalance', system),
+            behind: 'residual-couple',
+          },
         ]}
       />
       {train.crankMass === undefined || train.operating.max === undefined ? (
@@ -104,4 +113,12 @@ export function ResidualSection() {
       )}
     </LeafSection>
   )
+}
+
+function behindPlane(places: readonly [number, number], i: number, gradeMmS: number) {
+  const [planeMm, otherPlaneMm] = [places[i], places[1 - i]].map((place) => fromSi(place, 'mm'))
+  return {
+    residual: { figure: 'plane-residual', planeMm, otherPlaneMm },
+    permissible: { figure: 'plane-permissible', planeMm, otherPlaneMm, gradeMmS },
+  } as const
 }

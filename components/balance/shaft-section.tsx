@@ -11,6 +11,7 @@ import { Segmented } from '@/components/ui/segmented'
 import { designShafts, type ShaftWish } from '@/lib/mechanics/balance/shaft-design'
 import { exactOrders, type OrderTurning } from '@/lib/mechanics/balance/turning'
 import type { BalanceShaft, Train } from '@/lib/mechanics/train'
+import type { FigureRow } from '@/components/figures/note'
 import { formatQuantity, quantityText } from '@/lib/units/format'
 import { scaleFor, type System } from '@/lib/units/quantities'
 import { fromSi, toSi, units } from '@/lib/units/units'
@@ -198,7 +199,18 @@ function shaftTable(shafts: readonly BalanceShaft[], system: System): Table {
 const sizeOf = (turning: OrderTurning, kind: 'force' | 'couple', order: 1 | 2) =>
   order === 1 ? turning[kind].backward.size : turning[kind].major
 
-function resultRows(before: OrderTurning, after: OrderTurning, order: 1 | 2, square: number, system: System) {
+const taken = {
+  1: { force: 'order-backward', couple: 'order-couple-backward' },
+  2: { force: 'order-long-axis', couple: 'order-couple-long-axis' },
+} as const
+
+function resultRows(
+  before: OrderTurning,
+  after: OrderTurning,
+  order: 1 | 2,
+  square: number,
+  system: System,
+): FigureRow[] {
   return (['force', 'couple'] as const).flatMap((kind) =>
     (
       [
@@ -212,6 +224,7 @@ function resultRows(before: OrderTurning, after: OrderTurning, order: 1 | 2, squ
         kind === 'force' ? 'force' : 'torque',
         system,
       ),
+      behind: turning === before ? { figure: taken[order][kind], order } : undefined,
     })),
   )
 }

@@ -1,6 +1,7 @@
 'use client'
 
 import { useState } from 'react'
+import { BehindFigure } from '@/components/figures/behind'
 import { LeafSection } from '@/components/figures/leaf'
 import { Caution } from '@/components/figures/note'
 import { densities, SLUG_AT, webLoad } from '@/lib/mechanics/balance/half-disc'
@@ -29,6 +30,19 @@ export function WebSection() {
   )
   const onStays = (id: string, on: boolean) =>
     setStays((now) => (on ? new Set([...now, id]) : new Set([...now].filter((other) => other !== id))))
+  const slugFigure = (figure: 'slug-volume' | 'slug-mass' | 'slug-diameter', id: string, text: string) => (
+    <BehindFigure
+      behind={{
+        figure,
+        counterweight: id,
+        slugDensity: densities[metal],
+        sizes: { webThickness: room.thickness, counterweightRadius: room.radius },
+      }}
+      label={`Slug of ${id}, ${text}`}
+    >
+      {text}
+    </BehindFigure>
+  )
   const sizes = `${quantityText(room.radius, 'length', system)} radius, ${quantityText(room.thickness, 'length', system)} thick`
   return (
     <LeafSection title="Counterweights, a web at a time" at={`webs of ${sizes}`} wide>
@@ -41,7 +55,14 @@ export function WebSection() {
       ) : (
         <div className="web-pair">
           <div className="web-side">
-            <WebTable loads={loads} chosen={chosen} onChoose={setPicked} stays={stays} onStays={onStays} />
+            <WebTable
+              loads={loads}
+              room={room}
+              chosen={chosen}
+              onChoose={setPicked}
+              stays={stays}
+              onStays={onStays}
+            />
             {beyond.length > 0 ? (
               <div className="slugs">
                 <p className="say">
@@ -51,9 +72,15 @@ export function WebSection() {
                 <ul>
                   {beyond.map(({ id, slug }) => (
                     <li key={id}>
-                      {id}: {formatNumber(slug.volume * 1e6, { decimals: 1 })} cm³,{' '}
-                      {quantityText(slug.mass, 'mass', system)},{' '}
-                      {quantityText(slug.diameter, 'length', system)} across right through the web
+                      {id}:{' '}
+                      {slugFigure(
+                        'slug-volume',
+                        id,
+                        `${formatNumber(slug.volume * 1e6, { decimals: 1 })} cm³`,
+                      )}
+                      , {slugFigure('slug-mass', id, quantityText(slug.mass, 'mass', system))},{' '}
+                      {slugFigure('slug-diameter', id, quantityText(slug.diameter, 'length', system))} across
+                      right through the web
                     </li>
                   ))}
                 </ul>

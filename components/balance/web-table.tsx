@@ -1,6 +1,7 @@
 'use client'
 
-import type { WebLoad } from '@/lib/mechanics/balance/half-disc'
+import { BehindFigure } from '@/components/figures/behind'
+import type { WebLoad, WebRoom } from '@/lib/mechanics/balance/half-disc'
 import { formatNumber } from '@/lib/units/format'
 import { useSessionState } from '@/scene/session/react'
 import { DocumentField, FieldRefusal } from '@/components/figures/document-field'
@@ -10,6 +11,7 @@ const heads = ['axial', 'moment', 'angle', 'radius', 'mass'] as const
 
 interface Props {
   loads: WebLoad[]
+  room: WebRoom
   chosen: number
   onChoose(index: number): void
   stays: ReadonlySet<string>
@@ -17,7 +19,7 @@ interface Props {
 }
 
 /** The counterweights, a web at a time: each figure can be typed. */
-export function WebTable({ loads, chosen, onChoose, stays, onStays }: Props) {
+export function WebTable({ loads, room, chosen, onChoose, stays, onStays }: Props) {
   const scene = useSessionState((state) => state.scene)
   const system = useSessionState((state) => state.system)
   const weights = scene.train.counterweights
@@ -66,7 +68,7 @@ export function WebTable({ loads, chosen, onChoose, stays, onStays }: Props) {
                     </td>
                   ))}
                   <td className="n">
-                    <Share load={loads[index]} />
+                    <Share load={loads[index]} id={id} room={room} />
                   </td>
                   <td>
                     <input
@@ -90,15 +92,26 @@ export function WebTable({ loads, chosen, onChoose, stays, onStays }: Props) {
 }
 
 /** A share of the half disc; beyond it in the pencil's octagon, with the word. */
-function Share({ load }: { load: WebLoad | undefined }) {
+function Share({ load, id, room }: { load: WebLoad | undefined; id: string; room: WebRoom }) {
   if (!load) return '–'
   const share = load.moment / load.capacity
   const text = `${formatNumber(100 * share, { decimals: 0 })} %`
+  const figure = (
+    <BehindFigure
+      behind={{
+        figure: 'counterweight-share',
+        counterweight: id,
+        sizes: { webThickness: room.thickness, counterweightRadius: room.radius },
+      }}
+    >
+      {text}
+    </BehindFigure>
+  )
   return load.slug ? (
     <>
-      <span className="beyond">beyond</span> {text}
+      <span className="beyond">beyond</span> {figure}
     </>
   ) : (
-    text
+    figure
   )
 }

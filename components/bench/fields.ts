@@ -5,15 +5,7 @@ import { crankcaseField, heatReleaseFields } from '@/scene/session/gas-fields'
 import type { Path } from '@/scene/session/path'
 import { plainField } from '@/scene/session/plain-field'
 import { setThrowPitch, throwPitch } from '@/scene/session/structure'
-import {
-  angleSlip,
-  centreSlip,
-  notNegative,
-  factorSlip,
-  slip,
-  speedSlip,
-  usual,
-} from '@/scene/session/usual'
+import { angleSlip, centreSlip, notNegative, factorSlip, slip, speedSlip, usual } from '@/scene/session/usual'
 
 const length = (path: Path, label: string, more?: Partial<QuantityFieldOptions>) =>
   plainField(path, label, 'length', 'mm', { refuse: notNegative('A length'), ...more })

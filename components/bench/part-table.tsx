@@ -1,49 +1,24 @@
 'use client'
 
-import { useId, useState } from 'react'
+import { useId } from 'react'
 import { Icon } from '@/components/ui/icon'
 import { NumberField } from '@/components/ui/number-field'
 import type { CrankTrain } from '@/scene/model/crank-train'
 import type { Field } from '@/scene/session/field'
 import { useBench, useResults, useSessionState } from '@/scene/session/react'
 import { splitNames } from '@/scene/session/split-names'
+import { FoldedRow } from './folded-row'
 import type { Column, TableSpec } from './part-tables'
 import { RefusedNote } from '@/components/figures/refused-note'
 
 /** A list of the document, folded away in the parts list until it is wanted. */
 export function PartTable({ table, number }: { table: TableSpec; number: number }) {
-  const id = useId()
-  const [open, setOpen] = useState(false)
   const count = useSessionState((state) => state.scene.train[table.list].length)
   const bad = useSessionState((state) => Object.keys(state.refused).some((key) => belongs(table, key)))
   return (
-    <>
-      <tr className={bad ? 'bad' : 'free'} data-row={table.key}>
-        <td className="no">
-          <span className="ball">{number}</span>
-        </td>
-        <th scope="row">{table.label}</th>
-        <td className="wideval r" colSpan={2}>
-          <button
-            type="button"
-            className="btn sm txt fold"
-            aria-expanded={open}
-            aria-controls={id}
-            aria-label={`${table.label}, ${count}`}
-            onClick={() => setOpen(!open)}
-          >
-            <span className="fig">{count}</span> <Icon name="down" />
-          </button>
-        </td>
-      </tr>
-      {open || bad ? (
-        <tr className="subtable-row">
-          <td colSpan={4} id={id}>
-            <TableBody table={table} />
-          </td>
-        </tr>
-      ) : null}
-    </>
+    <FoldedRow row={table.key} number={number} label={table.label} count={count} bad={bad}>
+      <TableBody table={table} />
+    </FoldedRow>
   )
 }
 

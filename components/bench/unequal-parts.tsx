@@ -5,6 +5,7 @@ import { Icon } from '@/components/ui/icon'
 import { NumberField } from '@/components/ui/number-field'
 import { withUnit } from '@/lib/units/format'
 import { useBench, useSessionState } from '@/scene/session/react'
+import { FoldedRow } from './folded-row'
 import { differ, ownNames, ownValues, statesOwn, type OwnField } from './own-fields'
 import { RefusedNote } from '@/components/figures/refused-note'
 
@@ -12,73 +13,53 @@ const KEY = 'table.unequal'
 
 /** What some cylinder has otherwise than the rest, each value with a way back to the common one. */
 export function UnequalParts({ number }: { number: number }) {
-  const id = useId()
-  const [open, setOpen] = useState(false)
   const train = useSessionState(({ scene }) => scene.train)
   const refused = useSessionState((state) => state.refused)
   const own = ownValues(train)
   const bad = own.some(({ field }) => refused[field.key])
   return (
-    <>
-      <tr className={bad ? 'bad' : 'free'} data-row={KEY}>
-        <td className="no">
-          <span className="ball">{number}</span>
-        </td>
-        <th scope="row">Unequal parts</th>
-        <td className="wideval r" colSpan={2}>
-          <button
-            type="button"
-            className="btn sm txt fold"
-            aria-expanded={open}
-            aria-controls={id}
-            aria-label={`Unequal parts, ${own.length === 0 ? 'none' : own.length}`}
-            onClick={() => setOpen(!open)}
-          >
-            <span className="fig">{own.length === 0 ? 'none' : own.length}</span> <Icon name="down" />
-          </button>
-        </td>
-      </tr>
-      {open || bad ? (
-        <tr className="subtable-row">
-          <td colSpan={4} id={id}>
-            <div className="subtable">
-              {own.length > 0 ? (
-                <table>
-                  <thead>
-                    <tr>
-                      <th scope="col">Cylinder</th>
-                      <th scope="col">Part</th>
-                      <th scope="col">its own</th>
-                      <th scope="col">the others</th>
-                      <th scope="col">Reset</th>
-                    </tr>
-                  </thead>
-                  <tbody>
-                    {own.map((one) => (
-                      <OwnRow key={one.field.key} own={one} />
-                    ))}
-                  </tbody>
-                </table>
-              ) : (
-                <p className="cap">All cylinders are alike.</p>
-              )}
-              {own
-                .filter(({ field }) => refused[field.key])
-                .map(({ field }) => (
-                  <RefusedNote
-                    key={field.key}
-                    id={`note-${field.key}`}
-                    refusal={refused[field.key]}
-                    field={field}
-                    stands="what it was"
-                  />
-                ))}
-              <AddOwn />
-            </div>
-          </td>
-        </tr>
-      ) : null}
-    </>
+    <FoldedRow
+      row={KEY}
+      number={number}
+      label="Unequal parts"
+      count={own.length === 0 ? 'none' : own.length}
+      bad={bad}
+    >
+      <div className="subtable">
+        {own.length > 0 ? (
+          <table>
+            <thead>
+              <tr>
+                <th scope="col">Cylinder</th>
+                <th scope="col">Part</th>
+                <th scope="col">its own</th>
+                <th scope="col">the others</th>
+                <th scope="col">Reset</th>
+              </tr>
+            </thead>
+            <tbody>
+              {own.map((one) => (
+                <OwnRow key={one.field.key} own={one} />
+              ))}
+            </tbody>
+          </table>
+        ) : (
+          <p className="cap">All cylinders are alike.</p>
+        )}
+        {own
+          .filter(({ field }) => refused[field.key])
+          .map(({ field }) => (
+            <RefusedNote
+              key={field.key}
+              id={`note-${field.key}`}
+              refusal={refused[field.key]}
+              field={field}
+              stands="what it was"
+            />
+          ))}
+        <AddOwn />
+      </div>
+    </FoldedRow>
   )
 }
 

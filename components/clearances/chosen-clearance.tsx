@@ -2,10 +2,12 @@
 
 import { useCallback, useMemo } from 'react'
 import { crankAngleAxis, DEGREES, quantityAxis } from '@/components/figures/axis'
+import { behindClearance } from '@/components/figures/behind-clearance'
+import { Figures } from '@/components/figures/note'
 import { LeafSection } from '@/components/figures/leaf'
 import { LineChart } from '@/components/ui/charts/line-chart'
 import { clearanceModel, gapOf } from '@/lib/mechanics/clearance/clearances'
-import { quantityText } from '@/lib/units/format'
+import { formatQuantity, quantityText } from '@/lib/units/format'
 import type { ListedClearance } from '@/scene/frame/clearance-list'
 import { clearanceMends, type ClearanceMend } from '@/scene/frame/clearance-mends'
 import { clearanceAssumption, clearanceSentence, inSentence } from '@/scene/frame/clearance-words'
@@ -55,6 +57,15 @@ export function ChosenClearance({ clearance, onGo, sizes, results }: Props) {
               ) : null}
             </div>
           )}
+          <Figures
+            rows={[
+              {
+                name: 'Least gap',
+                figure: formatQuantity(clearance.gap, 'length', system),
+                behind: behindClearance(clearance, train, sizes),
+              },
+            ]}
+          />
           <p className="cap">{clearanceAssumption[clearance.pair.kind]}</p>
           <div className="row">
             <button type="button" className="btn" onClick={() => onGo(clearance)}>

@@ -5,6 +5,9 @@ import { scaleFor, type System } from '@/lib/units/quantities'
 import { fromSi } from '@/lib/units/units'
 import type { ClearanceList } from '@/scene/frame/clearance-list'
 
+/** The column of the least gaps. */
+export const GAP = 3
+
 /** Every clearance as a row; what is not known stands below with nothing in it. */
 export function clearanceTable({ clearances, notKnown }: ClearanceList, system: System): Table {
   const { unit } = scaleFor(0, 'length', system)

@@ -1,6 +1,8 @@
 'use client'
 
 import { useMemo, useState } from 'react'
+import { behindCell } from '@/components/figures/behind-cell'
+import { behindClearance } from '@/components/figures/behind-clearance'
 import { Leaf, LeafSection, useOpenLeaf } from '@/components/figures/leaf'
 import { Caution } from '@/components/figures/note'
 import { DocumentField } from '@/components/figures/document-field'
@@ -13,7 +15,7 @@ import { clearanceSentence } from '@/scene/frame/clearance-words'
 import { deckHeightField } from '@/scene/session/clearance-fields'
 import { useBench, useSessionState } from '@/scene/session/react'
 import { ChosenClearance } from './chosen-clearance'
-import { clearanceTable } from './clearance-table'
+import { clearanceTable, GAP } from './clearance-table'
 import { ClearanceMark } from './status'
 
 /** What comes near what over a turn of the crank, how near, and where. */
@@ -40,6 +42,11 @@ export function ClearancesLeaf() {
           table={table}
           chosen={at}
           onChoose={(row) => clearances[row] && setChosenId(clearances[row].id)}
+          figure={behindCell(table, (row, column) =>
+            column === GAP && clearances[row]
+              ? behindClearance(clearances[row], list.results.train, list.sizes)
+              : undefined,
+          )}
           more={{
             head: 'Instant',
             cell: (row) =>

@@ -2,8 +2,8 @@
 
 import { useMemo } from 'react'
 import { Dialog } from '@/components/ui/dialog'
-import { explain, type FigureId } from '@/lib/mechanics/explain/explain'
 import type { Asked } from '@/lib/mechanics/explain/engine'
+import { explain, type FigureId } from '@/lib/mechanics/explain/explain'
 import { methodLimits } from '@/lib/mechanics/method'
 import { formatNumber, formatQuantity, quantityText, withUnit } from '@/lib/units/format'
 import { toSi } from '@/lib/units/units'
@@ -11,8 +11,10 @@ import { sizesOf } from '@/scene/model/sizes'
 import { useResults, useSessionState } from '@/scene/session/react'
 import { Caution } from './caution'
 
+export type AskedBehind = { figure: FigureId } & Omit<Asked, 'speed'>
+
 interface Props {
-  asked: { figure: FigureId } & Omit<Asked, 'speed' | 'sizes'>
+  asked: AskedBehind
   onClose(): void
 }
 
@@ -26,9 +28,13 @@ export function BehindDialog({ asked, onClose }: Props) {
   const { train, document, speedRpm } = useResults()
   const system = useSessionState((state) => state.system)
   const told = useMemo(() => {
-    const { figure, ...rest } = asked
+    const { figure, sizes, ...rest } = asked
     try {
-      return explain(train, figure, { ...rest, speed: toSi(speedRpm, 'rpm'), sizes: sizesOf(document) })
+      return explain(train, figure, {
+        ...rest,
+        speed: toSi(speedRpm, 'rpm'),
+        sizes: { ...sizesOf(document), ...sizes },
+      })
     } catch (error) {
       if (error instanceof RangeError) return error.message
       throw error

@@ -4,10 +4,10 @@ import dynamic from 'next/dynamic'
 import { useState, type ReactNode } from 'react'
 import { createPortal } from 'react-dom'
 import type { FigureId } from '@/lib/mechanics/explain/explain'
-import type { Asked } from '@/lib/mechanics/explain/engine'
+import type { AskedBehind } from './behind-dialog'
 
-/** Which figure is meant: its name, and the part, moment or order where it has one. */
-export type Behind = FigureId | ({ figure: FigureId } & Omit<Asked, 'speed' | 'sizes'>)
+/** Which figure is meant: its name, and the part, moment or order where it has one; sizes where the document's are not meant. */
+export type Behind = FigureId | AskedBehind
 
 const BehindDialog = dynamic(() => import('./behind-dialog').then((module) => module.BehindDialog), {
   ssr: false,
@@ -15,8 +15,8 @@ const BehindDialog = dynamic(() => import('./behind-dialog').then((module) => mo
 
 interface Props {
   behind: Behind
-  /** The figure and its name, for whoever does not see where it stands: "Swept volume, 1,998 cm³". */
-  label: string
+  /** The figure and its name, for whoever does not see where it stands: "Swept volume, 1,998 cm³". A table's heads say it already. */
+  label?: string
   children: ReactNode
 }
 
@@ -30,7 +30,8 @@ export function BehindFigure({ behind, label, children }: Props) {
         type="button"
         className="behind"
         aria-haspopup="dialog"
-        aria-label={`${label}, behind this figure`}
+        aria-label={label && `${label}, behind this figure`}
+        title="Behind this figure"
         onClick={() => setOpen(true)}
       >
         {children}

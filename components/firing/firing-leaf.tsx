@@ -1,5 +1,6 @@
 'use client'
 
+import { BehindFigure } from '@/components/figures/behind'
 import { intervalWords } from '@/components/figures/interval-words'
 import { Leaf } from '@/components/figures/leaf'
 import { Caution } from '@/components/figures/note'
@@ -21,12 +22,21 @@ export function FiringLeaf() {
         ? ' Banks alternate all the way round.'
         : ' Some bank fires twice in a row.'
       : ''
+  const intervals = intervalWords(intervalsDeg, even)
   const turns = train.cycle / (2 * Math.PI)
   const perSecond = formatNumber((train.cylinders.length * speedRpm) / 60 / turns, { decimals: 1 })
   return (
     <Leaf
       title="Firing"
-      sentence={`${document.firingOrder.join('-')} fires ${even ? 'evenly' : 'unevenly'}, ${intervalWords(intervalsDeg, even)} degrees apart.${banks} At ${whole(speedRpm)} rpm that is ${perSecond} a second.`}
+      sentence={
+        <>
+          {document.firingOrder.join('-')} fires {even ? 'evenly' : 'unevenly'},{' '}
+          <BehindFigure behind="firing-evenness" label={`Firing intervals, ${intervals} degrees`}>
+            {intervals}
+          </BehindFigure>{' '}
+          degrees apart.{banks} At {whole(speedRpm)} rpm that is {perSecond} a second.
+        </>
+      }
     >
       <OrderSection />
       <CollectorSections />

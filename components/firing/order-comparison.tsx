@@ -1,3 +1,4 @@
+import { BehindFigure } from '@/components/figures/behind'
 import { angleWord } from '@/components/figures/interval-words'
 import type { RankedOrder } from '@/lib/mechanics/firing-ranking'
 import { firingTurns } from '@/lib/mechanics/firing-turns'
@@ -55,12 +56,17 @@ export function OrderComparison({ train, present, chosen, onTake, onTurns }: Pro
               <td key={head}>{intervalsOf(ranked)}</td>
             ))}
           </tr>
-          {criteria.map(({ name, unit, decimals, of }) => (
+          {criteria.map(({ id, name, unit, decimals, of }) => (
             <tr key={name}>
               <th scope="row">{name}</th>
-              {both.map(({ head, ranked }) => (
-                <td key={head}>{withUnit(formatNumber(of(ranked), { decimals }), unit)}</td>
-              ))}
+              {both.map(({ head, ranked }) => {
+                const text = withUnit(formatNumber(of(ranked), { decimals }), unit)
+                return (
+                  <td key={head}>
+                    {ranked === present ? <BehindFigure behind={id}>{text}</BehindFigure> : text}
+                  </td>
+                )
+              })}
             </tr>
           ))}
         </tbody>

@@ -1,5 +1,6 @@
 import { angleWord, intervalWords } from '@/components/figures/interval-words'
 import type { RankedOrder } from '@/lib/mechanics/firing-ranking'
+import type { FigureId } from '@/lib/mechanics/explain/explain'
 import type { Train } from '@/lib/mechanics/train'
 import { fromSi } from '@/lib/units/units'
 import type { Cell, Table } from '@/lib/tables/table'
@@ -23,13 +24,25 @@ export const intervalsOf = ({ intervals, spread }: RankedOrder) =>
   intervalWords(intervals.map(degrees), degrees(spread) <= EVEN_DEG)
 
 /** What an order is judged by, in the sequence of the ranking. */
-export const criteria: { name: string; unit: string; decimals: number; of(ranked: RankedOrder): number }[] = [
-  { name: 'Spread', unit: '°', decimals: 1, of: ({ spread }) => degrees(spread) },
-  { name: 'Rms', unit: '°', decimals: 1, of: ({ rms }) => degrees(rms) },
-  { name: 'Same bank', unit: '', decimals: 0, of: ({ sameBank }) => sameBank },
-  { name: 'Same throw', unit: '', decimals: 0, of: ({ sameThrow }) => sameThrow },
-  { name: 'Next throw', unit: '', decimals: 0, of: ({ adjacentThrow }) => adjacentThrow },
-  { name: 'In a collector', unit: '°', decimals: 1, of: ({ collectorSpread }) => degrees(collectorSpread) },
+export const criteria: {
+  id: FigureId
+  name: string
+  unit: string
+  decimals: number
+  of(ranked: RankedOrder): number
+}[] = [
+  { id: 'firing-evenness', name: 'Spread', unit: '°', decimals: 1, of: ({ spread }) => degrees(spread) },
+  { id: 'firing-rms', name: 'Rms', unit: '°', decimals: 1, of: ({ rms }) => degrees(rms) },
+  { id: 'same-bank', name: 'Same bank', unit: '', decimals: 0, of: ({ sameBank }) => sameBank },
+  { id: 'same-throw', name: 'Same throw', unit: '', decimals: 0, of: ({ sameThrow }) => sameThrow },
+  { id: 'next-throw', name: 'Next throw', unit: '', decimals: 0, of: ({ adjacentThrow }) => adjacentThrow },
+  {
+    id: 'collector-spread',
+    name: 'In a collector',
+    unit: '°',
+    decimals: 1,
+    of: ({ collectorSpread }) => degrees(collectorSpread),
+  },
 ]
 
 export const orderTable = (train: Train, orders: readonly RankedOrder[], present: string): Table => ({

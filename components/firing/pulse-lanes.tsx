@@ -1,6 +1,7 @@
 'use client'
 
 import { useId, useMemo } from 'react'
+import { BehindFigure } from '@/components/figures/behind'
 import { angleWord } from '@/components/figures/interval-words'
 import { ChartFrame } from '@/components/ui/charts/chart-frame'
 import { exhaustPulses, type PulseWindow } from '@/lib/mechanics/exhaust-pulses'
@@ -36,7 +37,15 @@ export function PulseLanes({ train, window, groups }: Props) {
       </ChartFrame>
       <ul className="firing-spreads">
         {lanes.map((lane) => (
-          <li key={lane.name}>{spreadWords(lane)}</li>
+          <li key={lane.name}>
+            {lane.collector !== undefined && lane.pulses.length > 1 ? (
+              <BehindFigure behind={{ figure: 'firing-evenness', collector: lane.collector }}>
+                {spreadWords(lane)}
+              </BehindFigure>
+            ) : (
+              spreadWords(lane)
+            )}
+          </li>
         ))}
       </ul>
       <p className="cap">

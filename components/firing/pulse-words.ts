@@ -9,6 +9,8 @@ import { collectorName } from './edits'
 /** A collector with its pulses in degrees, ready to be drawn and said. */
 export interface LaneGroup {
   name: string
+  /** Of the document, where it is one. */
+  collector?: string
   gapSpread: number
   overlapSpread: number
   worst: number
@@ -28,6 +30,7 @@ export const laneGroups = (
       collector === null
         ? `pipe of ${train.cylinders[pulses[0].cylinder].id}`
         : `collector ${proposed ? collectorName(collector) : train.collectors[collector].id}`,
+    collector: collector === null || proposed ? undefined : train.collectors[collector].id,
     gapSpread: degrees(gapSpread),
     overlapSpread: degrees(overlapSpread),
     worst,

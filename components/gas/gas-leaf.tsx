@@ -1,6 +1,7 @@
 'use client'
 
-import { useMemo, useState } from 'react'
+import { useMemo, useState, type ReactNode } from 'react'
+import { BehindFigure } from '@/components/figures/behind'
 import { useCylinderChoice } from '@/components/figures/cylinder-choice'
 import { Leaf, LeafSection } from '@/components/figures/leaf'
 import { Caution } from '@/components/figures/note'
@@ -125,9 +126,29 @@ export function GasLeaf() {
   )
 }
 
-function sentence(gas: Gas, lines: GasLine[], system: System): string {
+function sentence(gas: Gas, lines: GasLine[], system: System): ReactNode {
   if (gas.model === 'none')
     return 'No gas works in this engine. Take the model below, or bring in a measured trace.'
   const { engine } = lines[0]
-  return `The ${gas.model === 'trace' ? 'measured trace' : 'model'} indicates ${quantityText(engine.netPressure, 'pressure', system)} net, ${quantityText(engine.grossPressure, 'pressure', system)} gross: ${quantityText(engine.power, 'power', system)}.`
+  const [net, gross] = [engine.netPressure, engine.grossPressure].map((pressure) =>
+    quantityText(pressure, 'pressure', system),
+  )
+  const power = quantityText(engine.power, 'power', system)
+  return (
+    <>
+      The {gas.model === 'trace' ? 'measured trace' : 'model'} indicates{' '}
+      <BehindFigure behind="imep" label={`Net mean effective pressure, ${net}`}>
+        {net}
+      </BehindFigure>{' '}
+      net,{' '}
+      <BehindFigure behind="imep-gross" label={`Gross mean effective pressure, ${gross}`}>
+        {gross}
+      </BehindFigure>{' '}
+      gross:{' '}
+      <BehindFigure behind="indicated-power" label={`Indicated power, ${power}`}>
+        {power}
+      </BehindFigure>
+      .
+    </>
+  )
 }

@@ -1,9 +1,11 @@
 'use client'
 
 import { useMemo } from 'react'
+import { behindCell } from '@/components/figures/behind-cell'
 import { DEGREES } from '@/components/figures/axis'
 import { DataTable } from '@/components/ui/data-table'
 import { StatusMark } from '@/components/ui/icon'
+import type { FigureId } from '@/lib/mechanics/explain/explain'
 import { indicatedDoubts } from '@/lib/mechanics/indicated-doubts'
 import type { Column, Table } from '@/lib/tables/table'
 import { fileUnit } from '@/lib/units/file-unit'
@@ -14,7 +16,7 @@ import type { GasLine } from './gas-lines'
 
 /** Mean effective pressures, power and peaks: the engine's, and each cylinder's where they differ. */
 export function IndicatedFigures({ lines }: { lines: GasLine[] }) {
-  const { document, speedRpm } = useResults()
+  const { document, train, speedRpm } = useResults()
   const system = useSessionState((state) => state.system)
   const table = useMemo(
     () =>
@@ -30,6 +32,18 @@ export function IndicatedFigures({ lines }: { lines: GasLine[] }) {
   const doubts = lines.flatMap(({ name, engine }) =>
     indicatedDoubts(engine).map((doubt) => ({ ...doubt, name })),
   )
+  // only what works in the engine is explained: a line shown beside it is not the engine's
+  const inEngine = (name: unknown) => name === (document.gas.model === 'trace' ? 'measured' : 'model')
+  const figure = behindCell(table, (row, column) => {
+    const [name, of] = table.rows[row]
+    const id = shown[column - 2]?.id
+    if (document.gas.model === 'none' || !id || !inEngine(name)) return undefined
+    const one = train.cylinders.find((each) => of === `cylinder ${each.id}`)
+    const own = lines.find((line) => line.name === name)
+    const peaks = own?.engine.cylinders.map(({ peakPressure }) => peakPressure) ?? []
+    const highest = train.cylinders[peaks.indexOf(Math.max(...peaks))]
+    return { figure: id, cylinder: one?.id ?? (id === 'peak-pressure' ? highest?.id : undefined) }
+  })
   return (
     <>
       {doubts.map(({ code, message, name }) => (
@@ -41,12 +55,13 @@ export function IndicatedFigures({ lines }: { lines: GasLine[] }) {
           {message}
         </p>
       ))}
-      <DataTable table={table} />
+      <DataTable table={table} figure={figure} />
     </>
   )
 }
 
 interface Shown {
+  id: FigureId
   name: string
   quantity: Quantity
   decimals: number
@@ -62,10 +77,28 @@ interface Sums {
 }
 
 const shown: Shown[] = [
-  { name: 'Net mean effective pressure', quantity: 'pressure', decimals: 2, of: (it) => it.netPressure },
-  { name: 'Gross mean effective pressure', quantity: 'pressure', decimals: 2, of: (it) => it.grossPressure },
-  { name: 'Indicated power', quantity: 'power', decimals: 1, of: (it) => it.power },
-  { name: 'Peak pressure', quantity: 'pressure', decimals: 1, of: (it) => it.peakPressure },
+  {
+    id: 'imep',
+    name: 'Net mean effective pressure',
+    quantity: 'pressure',
+    decimals: 2,
+    of: (it) => it.netPressure,
+  },
+  {
+    id: 'imep-gross',
+    name: 'Gross mean effective pressure',
+    quantity: 'pressure',
+    decimals: 2,
+    of: (it) => it.grossPressure,
+  },
+  { id: 'indicated-power', name: 'Indicated power', quantity: 'power', decimals: 1, of: (it) => it.power },
+  {
+    id: 'peak-pressure',
+    name: 'Peak pressure',
+    quantity: 'pressure',
+    decimals: 1,
+    of: (it) => it.peakPressure,
+  },
 ]
 
 function tableOf(lines: GasLine[], ids: string[], speed: number, cycle: string, system: System): Table {

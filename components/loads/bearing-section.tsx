@@ -1,6 +1,8 @@
 'use client'
 
 import { useMemo, useState } from 'react'
+import { BehindFigure } from '@/components/figures/behind'
+import { behindCell } from '@/components/figures/behind-cell'
 import { LeafSection } from '@/components/figures/leaf'
 import { Figures } from '@/components/figures/note'
 import { SpeedWords } from '@/components/figures/speed-words'
@@ -14,6 +16,8 @@ import type { Table } from '@/lib/tables/table'
 import { formatNumber, formatQuantity } from '@/lib/units/format'
 import type { System } from '@/lib/units/quantities'
 import { useResults, useSessionState } from '@/scene/session/react'
+import type { FigureId } from '@/lib/mechanics/explain/explain'
+import type { Bearing } from '@/lib/mechanics/loads/bearings'
 import { DEGREES, degreesText, quantityAxis } from '@/components/figures/axis'
 import { BearingPolar } from './bearing-polar'
 import { surfaceWords, type Frame } from './bearing-words'
@@ -86,7 +90,16 @@ export function BearingSection({ parts }: { parts: CycleParts }) {
       {parts.train.mains.length < 2 ? (
         <p className="say">Fewer than two mains are described: their loads cannot be told.</p>
       ) : null}
-      <DataTable table={table} chosen={chosen} onChoose={(row) => setChosenName(all[row].name)} page={16} />
+      <DataTable
+        table={table}
+        chosen={chosen}
+        onChoose={(row) => setChosenName(all[row].name)}
+        figure={behindCell(table, (row, column) => {
+          const figure = behindColumns[column]
+          return figure && { figure, ...asked(all[row].bearing) }
+        })}
+        page={16}
+      />
       <p className="cap">
         Means and peaks are of the size of the load. Least loaded: the 60° of the surface with the least of
         what presses on it over the cycle, each load counted by its part square to the surface.
@@ -95,7 +108,19 @@ export function BearingSection({ parts }: { parts: CycleParts }) {
   )
 }
 
-function BearingFigures({ of: { figures, area } }: { of: BearingAtSpeed }) {
+const behindColumns: (FigureId | undefined)[] = [
+  undefined,
+  'bearing-peak',
+  undefined,
+  'bearing-mean',
+  'bearing-peak-on-area',
+]
+
+/** Which bearing is asked about. */
+const asked = ({ kind, id }: Bearing) =>
+  kind === 'main' ? { main: id } : kind === 'pin' ? { throw: id } : { cylinder: id }
+
+function BearingFigures({ of: { bearing, figures, area } }: { of: BearingAtSpeed }) {
   const system = useSessionState((state) => state.system)
   return (
     <Figures
@@ -103,13 +128,26 @@ function BearingFigures({ of: { figures, area } }: { of: BearingAtSpeed }) {
         {
           name: `Most, at ${degreesText(figures.peakAngle)}`,
           figure: formatQuantity(figures.peak, 'force', system),
+          behind: { figure: 'bearing-peak', ...asked(bearing) },
         },
-        { name: 'Mean', figure: formatQuantity(figures.mean, 'force', system) },
+        {
+          name: 'Mean',
+          figure: formatQuantity(figures.mean, 'force', system),
+          behind: { figure: 'bearing-mean', ...asked(bearing) },
+        },
         ...(figures.specific === undefined || area === undefined
           ? []
           : [
-              { name: 'Most, on its area', figure: formatQuantity(figures.specific, 'stress', system) },
-              { name: 'Mean, on its area', figure: formatQuantity(figures.mean / area, 'stress', system) },
+              {
+                name: 'Most, on its area',
+                figure: formatQuantity(figures.specific, 'stress', system),
+                behind: { figure: 'bearing-peak-on-area', ...asked(bearing) } as const,
+              },
+              {
+                name: 'Mean, on its area',
+                figure: formatQuantity(figures.mean / area, 'stress', system),
+                behind: { figure: 'bearing-mean-on-area', ...asked(bearing) } as const,
+              },
             ]),
       ]}
     />
@@ -129,10 +167,21 @@ function SectorWords({ of, frame }: { of: BearingAtSpeed; frame: Frame }) {
       </p>
     )
   const { surface, from } = surfaceWords(of.bearing, frame)
+  const share = `${formatNumber(100 * sector.share, { decimals: 0 })} %`
   return (
     <p className="say">
       The {surface} is least loaded from {sectorText(sector)}, counted from {from}: it bears{' '}
-      {formatNumber(100 * sector.share, { decimals: 0 })} % of the mean all round. An oil hole may sit there.
+      {frame === 'journal' ? (
+        <BehindFigure
+          behind={{ figure: 'least-loaded-sector', ...asked(of.bearing) }}
+          label={`Least loaded sector, ${share}`}
+        >
+          {share}
+        </BehindFigure>
+      ) : (
+        share
+      )}{' '}
+      of the mean all round. An oil hole may sit there.
       {noSize}
     </p>
   )

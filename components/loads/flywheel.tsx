@@ -1,5 +1,6 @@
 'use client'
 
+import { BehindFigure } from '@/components/figures/behind'
 import { TypedField } from '@/components/figures/typed-field'
 import { useTyped } from '@/components/figures/use-typed'
 import { flywheelInertia, speedFluctuation, speedRange } from '@/lib/mechanics/loads/flywheel'
@@ -44,6 +45,10 @@ export function Flywheel({ energy, speed }: Props) {
   const needed = flywheelInertia(energy, wanted.value!, speed)
   const neededFlywheel = roundedUp(needed - freeEnd)
   const run = given.value === undefined ? null : speedRange(energy, given.value, speed)
+  const varies =
+    given.value === undefined
+      ? ''
+      : quantityText(speedFluctuation(energy, given.value, speed), 'share', system, { significant: 3 })
   const rpm = (value: number) => formatNumber(fromSi(value, 'rpm'), { decimals: 0 })
   return (
     <div className="loads-flywheel">
@@ -54,7 +59,14 @@ export function Flywheel({ energy, speed }: Props) {
         shown={formatQuantity(wanted.value!, 'share', system, { decimals: 2 })}
       />
       <p className="say" aria-live="polite">
-        It takes {inertiaText(needed, system)} in all, flywheel and free end together.{' '}
+        It takes{' '}
+        <BehindFigure
+          behind={{ figure: 'flywheel', fluctuation: wanted.value }}
+          label={`Flywheel inertia, ${inertiaText(needed, system)}`}
+        >
+          {inertiaText(needed, system)}
+        </BehindFigure>{' '}
+        in all, flywheel and free end together.{' '}
         {entered > 0
           ? needed > entered
             ? `That is ${inertiaText(needed - entered, system)} more than the sheet has.`
@@ -82,9 +94,20 @@ export function Flywheel({ energy, speed }: Props) {
         }
       />
       <p className="say" aria-live="polite">
-        {run && given.value !== undefined
-          ? `The speed varies by ${quantityText(speedFluctuation(energy, given.value, speed), 'share', system, { significant: 3 })}: from ${rpm(run.least)} to ${rpm(run.most)} rpm.`
-          : 'Type an inertia to see how far the speed varies with it.'}
+        {run && given.value !== undefined ? (
+          <>
+            The speed varies by{' '}
+            <BehindFigure
+              behind={{ figure: 'speed-fluctuation', inertiaKgM2: given.value }}
+              label={`Speed fluctuation, ${varies}`}
+            >
+              {varies}
+            </BehindFigure>
+            : from {rpm(run.least)} to {rpm(run.most)} rpm.
+          </>
+        ) : (
+          'Type an inertia to see how far the speed varies with it.'
+        )}
       </p>
       <p className="cap">
         Energy to and fro ÷ (share × speed²), the turning-moment diagram’s way. Crank, rods and what is driven

@@ -2,6 +2,7 @@
 
 import { useMemo, useState } from 'react'
 import { LeafSection } from '@/components/figures/leaf'
+import { Figures } from '@/components/figures/note'
 import { SpeedWords } from '@/components/figures/speed-words'
 import { BarChart } from '@/components/ui/charts/bar-chart'
 import { StarChart } from '@/components/ui/charts/star-chart'
@@ -10,7 +11,7 @@ import type { CycleParts } from '@/lib/mechanics/loads/cycle-parts'
 import { loadParts, type LoadPart } from '@/lib/mechanics/loads/part-signals'
 import { orderStar, torqueOrders } from '@/lib/mechanics/loads/torque-orders'
 import { torqueSignal } from '@/lib/mechanics/loads/turning-moment'
-import { formatNumber, quantityText } from '@/lib/units/format'
+import { formatNumber, formatQuantity, quantityText } from '@/lib/units/format'
 import { toSi } from '@/lib/units/units'
 import { useResults, useSessionState } from '@/scene/session/react'
 import { DEGREES, quantityAxis } from '@/components/figures/axis'
@@ -87,12 +88,38 @@ export function HarmonicsSection({ parts }: { parts: CycleParts }) {
         />
         <Star parts={parts} part={shownPart} order={orders[chosen].order} />
       </div>
+      <Figures
+        rows={[
+          {
+            name: `Amplitude at order ${orderText(orders[chosen].order)}, ${shownPart}`,
+            figure: formatQuantity(orders[chosen].amplitude, 'torque', system),
+            // gas and inertia apart are not explained by themselves; without gas, inertia is all there is
+            behind:
+              shownPart === 'total' || !gas
+                ? { figure: 'torque-order', order: orders[chosen].order }
+                : undefined,
+          },
+          {
+            name: 'Vector sum, all alike',
+            figure: {
+              text: formatNumber(sumOf(plan.fires, orders[chosen].order), { decimals: 2 }),
+              unit: '',
+            },
+            behind: { figure: 'order-vector-sum', order: orders[chosen].order },
+          },
+        ]}
+      />
       <p className="cap">
         A diamond marks a major order: the cylinders’ vectors are all within 20° of their sum. Amplitude and
         phase are of moment = amplitude × cos(order × crank angle − phase).
       </p>
     </LeafSection>
   )
+}
+
+function sumOf(fires: ArrayLike<number>, order: number): number {
+  const { sum } = orderStar(fires, order)
+  return Math.hypot(sum.re, sum.im)
 }
 
 function majorWords(majors: string[], many: boolean): string {

@@ -1,6 +1,7 @@
 'use client'
 
 import { useMemo, useState } from 'react'
+import { Figures } from '@/components/figures/note'
 import { LeafSection } from '@/components/figures/leaf'
 import { LineChart } from '@/components/ui/charts/line-chart'
 import type { Look } from '@/components/ui/charts/types'
@@ -14,6 +15,7 @@ import type { Quantity, System } from '@/lib/units/quantities'
 import { fromSi, standardGravity, toSi } from '@/lib/units/units'
 import { useResults, useSessionState } from '@/scene/session/react'
 import { quantityAxis, type QuantityAxis } from '@/components/figures/axis'
+import { behindSweep } from './behind-sweep'
 
 interface Line {
   key: Exclude<keyof SweepPoint, 'speed'>
@@ -88,6 +90,7 @@ export function SweepSection({ parts }: { parts: CycleParts }) {
   const axis = axisOf(name, quantity, points, lines, system)
   const now = withoutRounding(sweepPoint(sweep, toSi(speedRpm, 'rpm')))
   const red = bounds.redline === undefined ? null : withoutRounding(sweepPoint(sweep, bounds.redline))
+  const behind = useMemo(() => behindSweep(parts, toSi(speedRpm, 'rpm')), [parts, speedRpm])
   const nothing = lines.every(({ key }) => points.every((point) => point[key] === 0))
   const read = (point: SweepPoint) =>
     lines
@@ -132,6 +135,13 @@ export function SweepSection({ parts }: { parts: CycleParts }) {
           ...(red ? [{ x: fromSi(red.speed, 'rpm'), text: 'red line' }] : []),
           ...(within ? [{ x: speedRpm, text: 'now' }] : []),
         ]}
+      />
+      <Figures
+        rows={lines.map((line) => ({
+          name: `${lines.length > 1 ? `${name}, ${line.name}` : name}, at ${rpm(now.speed)} rpm`,
+          figure: { text: axis.format(axis.shown(now[line.key])), unit: axis.unit },
+          behind: behind[line.key],
+        }))}
       />
       <p className="cap">
         {boundWords(bounds)}{' '}

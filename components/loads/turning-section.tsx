@@ -1,6 +1,8 @@
 'use client'
 
 import { useMemo, useState } from 'react'
+import type { Behind } from '@/components/figures/behind'
+import { behindCell } from '@/components/figures/behind-cell'
 import { CycleChart } from '@/components/figures/cycle-chart'
 import { LeafSection } from '@/components/figures/leaf'
 import { Figures } from '@/components/figures/note'
@@ -62,6 +64,8 @@ export function TurningSection({ parts }: { parts: CycleParts }) {
     [parts, speed, cylinders],
   )
   const table = useMemo(() => momentTable(all, system), [all, system])
+  /** A bank's or a cylinder's own share has no explanation of its own. */
+  const whole = (behind: Behind) => (chosen === 0 ? behind : undefined)
   const torque = (value: number) => formatQuantity(value, 'torque', system)
   return (
     <LeafSection title="Turning moment" at={<SpeedWords />} wide>
@@ -86,21 +90,59 @@ export function TurningSection({ parts }: { parts: CycleParts }) {
       <div className="loads-pair">
         <Figures
           rows={[
-            { name: 'Mean', figure: torque(figures.mean) },
-            { name: `Most, at ${degreesText(figures.most.angle)}`, figure: torque(figures.most.value) },
-            { name: `Least, at ${degreesText(figures.least.angle)}`, figure: torque(figures.least.value) },
-            { name: 'Power of the mean', figure: formatQuantity(figures.mean * speed, 'power', system) },
-            { name: 'Energy, to and fro', figure: formatQuantity(figures.energy, 'energy', system) },
+            {
+              name: 'Mean',
+              figure: torque(figures.mean),
+              behind: whole('torque-mean'),
+            },
+            {
+              name: `Most, at ${degreesText(figures.most.angle)}`,
+              figure: torque(figures.most.value),
+              behind: whole({ figure: 'torque', angleDeg: figures.most.angle * DEGREES }),
+            },
+            {
+              name: `Least, at ${degreesText(figures.least.angle)}`,
+              figure: torque(figures.least.value),
+              behind: whole({ figure: 'torque', angleDeg: figures.least.angle * DEGREES }),
+            },
+            {
+              name: 'Power of the mean',
+              figure: formatQuantity(figures.mean * speed, 'power', system),
+              behind: whole('mean-power'),
+            },
+            {
+              name: 'Energy, to and fro',
+              figure: formatQuantity(figures.energy, 'energy', system),
+              behind: whole('energy-fluctuation'),
+            },
           ]}
         />
         <Flywheel energy={all[0].figures.energy} speed={speed} />
       </div>
       {all.length > 1 ? (
-        <DataTable table={table} chosen={chosen} onChoose={(row) => setChosenName(all[row].name)} page={20} />
+        <DataTable
+          table={table}
+          chosen={chosen}
+          onChoose={(row) => setChosenName(all[row].name)}
+          figure={behindCell(table, (row, column) =>
+            row === 0 ? behindWhole(all[0].figures)[column] : undefined,
+          )}
+          page={20}
+        />
       ) : null}
     </LeafSection>
   )
 }
+
+const behindWhole = ({ most, least }: ReturnType<typeof momentFigures>): (Behind | undefined)[] => [
+  undefined,
+  'torque-mean',
+  { figure: 'torque', angleDeg: most.angle * DEGREES },
+  undefined,
+  { figure: 'torque', angleDeg: least.angle * DEGREES },
+  undefined,
+  'energy-fluctuation',
+]
 
 function momentTable(all: (Group & { figures: ReturnType<typeof momentFigures> })[], system: System): Table {
   const peak = Math.max(...all.map(({ figures }) => figures.most.value))

@@ -14,12 +14,14 @@ interface Props {
   onChoose?(row: number): void
   /** A drawing or a button at the end of a row. */
   more?: { head: string; cell(row: number): ReactNode }
+  /** What stands in a cell in place of its bare text. */
+  figure?(text: string, row: number, column: number): ReactNode
   /** Rows on one page. */
   page?: number
 }
 
 /** Figures in rows: sorted by any column, a page at a time, with files of the whole of it. */
-export function DataTable({ table, bare, chosen, onChoose, more, page = 50 }: Props) {
+export function DataTable({ table, bare, chosen, onChoose, more, figure, page = 50 }: Props) {
   const [by, setBy] = useState<{ column: number; down: boolean } | null>(null)
   const [from, setFrom] = useState(0)
   const order = table.rows.map((_, i) => i)
@@ -71,6 +73,8 @@ export function DataTable({ table, bare, chosen, onChoose, more, page = 50 }: Pr
                       <button type="button" className="row-button" onClick={() => onChoose(row)}>
                         {formatCell(cell, table.columns[i])}
                       </button>
+                    ) : figure ? (
+                      figure(formatCell(cell, table.columns[i]), row, i)
                     ) : (
                       formatCell(cell, table.columns[i])
                     )}

@@ -41,6 +41,9 @@ export const explain = operation({
     main: id.optional(),
     bank: id.optional(),
     collector: id.optional(),
+    counterweight: id.optional(),
+    /** Of a pair of cylinders, the second. */
+    other: id.optional(),
     /** Per crank revolution. */
     order: z.number().positive().max(12).optional(),
     /** The crank without counterweights and balance shafts. */
@@ -49,6 +52,13 @@ export const explain = operation({
     gradeMmS: z.number().positive().max(4000).optional(),
     /** Wanted coefficient of speed fluctuation. */
     fluctuation: z.number().positive().max(1).optional(),
+    /** Of flywheel and free end; the train's own where not given. */
+    inertiaKgM2: z.number().positive().max(1e9).optional(),
+    /** Two balancing planes along the crank, the asked one first; the outermost bearings where not given. */
+    planeMm: z.number().min(-100_000).max(100_000).optional(),
+    otherPlaneMm: z.number().min(-100_000).max(100_000).optional(),
+    /** Of a slug of heavier metal, in kg/m³. */
+    slugDensity: z.number().gt(7850).max(25_000).optional(),
   }),
   status: 200,
   answer: explanationSchema,

@@ -12,6 +12,9 @@ export function sizesOf({ shape = {} }: CrankTrain): Sizes {
     mainLength: metres(shape.mainLengthMm),
     webThickness: metres(shape.webThicknessMm),
     counterweightRadius: metres(shape.counterweightRadiusMm),
+    skirtBelowPin: metres(shape.skirtBelowPinMm),
+    crownAbovePin: metres(shape.compressionHeightMm),
+    deckHeight: metres(shape.deckHeightMm),
   }
   return sizes
 }

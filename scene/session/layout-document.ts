@@ -4,7 +4,7 @@ import { leastCounterweights } from '@/lib/mechanics/layouts/counterweights'
 import type { Layout } from '@/lib/mechanics/layouts/layout'
 import { wrap } from '@/lib/numerics/wrap'
 import { fromSi, toSi } from '@/lib/units/units'
-import { crankTrainSchema, type CrankTrain } from '@/scene/model/crank-train'
+import { crankTrainSchema, shapeSchema, type CrankTrain } from '@/scene/model/crank-train'
 import { cylinderValues } from '@/scene/model/cylinder-values'
 import { toTrain } from '@/scene/model/to-train'
 import { setOut } from './set-out'
@@ -122,27 +122,20 @@ function withTurns(document: CrankTrain, { order, intervals }: LayoutPlan): Cran
   }
 }
 
+const acrossCrank = shapeSchema.pick({
+  pinDiaMm: true,
+  mainDiaMm: true,
+  webWidthMm: true,
+  counterweightRadiusMm: true,
+  compressionHeightMm: true,
+  skirtBelowPinMm: true,
+  builtUp: true,
+})
+
 /** Lengths along the crank go with the spacing of the throws; without it the pictures use usual proportions. */
 function shapeOf({ shape }: CrankTrain, sameSpacing: boolean): CrankTrain['shape'] {
   if (!shape || sameSpacing) return shape
-  const {
-    pinDiaMm,
-    mainDiaMm,
-    webWidthMm,
-    counterweightRadiusMm,
-    compressionHeightMm,
-    skirtBelowPinMm,
-    builtUp,
-  } = shape
-  return {
-    pinDiaMm,
-    mainDiaMm,
-    webWidthMm,
-    counterweightRadiusMm,
-    compressionHeightMm,
-    skirtBelowPinMm,
-    builtUp,
-  }
+  return acrossCrank.parse(shape)
 }
 
 function titleOf({ bankAngle, split, throwAngles, order }: LayoutPlan, cycle: CrankTrain['cycle']): string {

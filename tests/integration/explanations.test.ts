@@ -10,7 +10,8 @@ import { useServer } from './support/server'
 
 useServer()
 
-const train = preset('v8x-5000')
+const v8 = preset('v8x-5000')
+const train = { ...v8, shape: { ...v8.shape, deckHeightMm: 240 } }
 const ask = (body: object) =>
   call('POST', '/api/v1/explanations', { body: { train, speedRpm: 6500, ...body } })
 

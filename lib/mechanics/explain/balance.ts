@@ -91,7 +91,7 @@ export function balanceFactor({ train, pin }: Engine): Draft {
 }
 
 /** Sums of unbalance by what carries it, straight up and to +90°, g mm; with `arm` a couple, g mm². */
-function unbalances({ train }: Engine, arm: boolean) {
+export function unbalances({ train }: Engine, arm: boolean) {
   const lever = (axial: number) => (arm ? (axial - train.referenceAxial) * MM : 1)
   const weights = bobWeights(train)
   const groups = {

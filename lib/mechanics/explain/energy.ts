@@ -79,10 +79,10 @@ const evaluateEnergy = (engine: Engine) => {
   return greatest.energy - least.energy
 }
 
-/** Coefficient of speed fluctuation with the train's own flywheel. */
+/** Coefficient of speed fluctuation with the train's own flywheel, or one that is asked about. */
 export function speedFluctuation(engine: Engine): Draft {
-  const { plan, train } = engine
-  const own = train.inertia.flywheel + train.inertia.freeEnd
+  const { plan, train, asked } = engine
+  const own = asked.inertiaKgM2 ?? train.inertia.flywheel + train.inertia.freeEnd
   if (!(own > 0) || plan.speed === 0) throw new RangeError('A flywheel and a speed above 0 are needed.')
   return {
     title: 'Speed fluctuation',

@@ -11,6 +11,11 @@ export interface Sizes {
   mainLength?: number
   webThickness?: number
   counterweightRadius?: number
+  /** Of a piston, below and above its pin. */
+  skirtBelowPin?: number
+  crownAbovePin?: number
+  /** Over the crank axis. */
+  deckHeight?: number
 }
 
 /** Which figure of a train is asked about: a moment, and one of its parts where the figure has one. */
@@ -25,6 +30,9 @@ export interface Asked {
   main?: string
   bank?: string
   collector?: string
+  counterweight?: string
+  /** Of a pair of cylinders, the second. */
+  other?: string
   /** Per crank revolution; 1 where not given. */
   order?: number
   /** The crank without counterweights and balance shafts. */
@@ -33,6 +41,13 @@ export interface Asked {
   gradeMmS?: number
   /** Wanted coefficient of speed fluctuation; what the train's own flywheel gives where not given. */
   fluctuation?: number
+  /** Of flywheel and free end, kg m²; the train's own where not given. */
+  inertiaKgM2?: number
+  /** Places of two balancing planes along the crank, the asked one first; the outermost bearings where not given. */
+  planeMm?: number
+  otherPlaneMm?: number
+  /** kg/m³; tungsten alloy where not given. */
+  slugDensity?: number
   sizes?: Sizes
 }
 

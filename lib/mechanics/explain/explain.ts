@@ -1,5 +1,8 @@
 import type { Train } from '../train'
 import * as balance from './balance'
+import * as bearing from './bearing'
+import * as clearance from './clearance'
+import * as counterweight from './counterweight'
 import * as deadCentres from './dead-centres'
 import * as energy from './energy'
 import * as indicated from './indicated'
@@ -9,9 +12,12 @@ import * as firing from './firing'
 import * as forces from './forces'
 import * as mains from './mains'
 import * as motion from './motion'
+import * as planes from './planes'
 import * as shaking from './shaking'
 import * as sizes from './sizes'
+import * as succession from './succession'
 import * as torque from './torque'
+import * as torqueOrders from './torque-orders'
 
 /** Every figure that can be explained, by the name it is asked for. */
 export const explained = {
@@ -22,6 +28,13 @@ export const explained = {
   'bore-to-stroke': sizes.boreToStroke,
   'journal-overlap': sizes.overlap,
   'counterweight-capacity': sizes.counterweightCapacity,
+  'counterweight-share': counterweight.counterweightShare,
+  'slug-volume': counterweight.slugVolume,
+  'slug-mass': counterweight.slugMass,
+  'slug-diameter': counterweight.slugDiameter,
+  'skirt-to-counterweight': clearance.skirtToCounterweight,
+  'piston-to-deck': clearance.pistonToDeck,
+  'bore-wall': clearance.boreWall,
   'pin-height': motion.pinHeight,
   'piston-travel': motion.travel,
   'piston-velocity': motion.velocity,
@@ -33,28 +46,48 @@ export const explained = {
   'gas-force': forces.gasForce,
   'side-thrust': forces.sideThrust,
   'rod-load': forces.rodLoad,
+  'rod-pull': forces.rodPull,
   'first-order-force': forces.firstOrder,
   'second-order-force': forces.secondOrder,
   'main-peak': mains.mainPeak,
   'main-mean': mains.mainMean,
   'main-specific-load': mains.specificLoad,
   'pin-specific-load': mains.pinSpecificLoad,
+  'bearing-peak': bearing.bearingPeak,
+  'bearing-mean': bearing.bearingMean,
+  'bearing-peak-on-area': bearing.bearingPeakOnArea,
+  'bearing-mean-on-area': bearing.bearingMeanOnArea,
+  'least-loaded-sector': bearing.leastLoaded,
   'shaking-force': shaking.shakingForce,
   'shaking-couple': shaking.shakingCouple,
   'order-forward': shaking.orderForward,
   'order-backward': shaking.orderBackward,
   'order-couple-forward': shaking.orderCoupleForward,
   'order-couple-backward': shaking.orderCoupleBackward,
+  'order-long-axis': shaking.orderLongAxis,
+  'order-short-axis': shaking.orderShortAxis,
+  'order-couple-long-axis': shaking.orderCoupleLongAxis,
+  'order-couple-short-axis': shaking.orderCoupleShortAxis,
   torque: torque.torque,
   'torque-mean': torque.torqueMean,
   'torque-peak': torque.torquePeak,
+  'mean-power': torque.meanPower,
+  'torque-order': torqueOrders.torqueOrder,
+  'order-vector-sum': torqueOrders.orderVectorSum,
   'energy-fluctuation': energy.energyFluctuation,
   flywheel: energy.flywheel,
   'speed-fluctuation': energy.speedFluctuation,
   imep: indicated.imep,
+  'imep-gross': indicated.imepGross,
   'indicated-power': indicated.indicatedPower,
+  'peak-pressure': indicated.peakPressure,
   'firing-interval': firing.firingInterval,
   'firing-evenness': firing.firingEvenness,
+  'firing-rms': succession.firingRms,
+  'collector-spread': succession.collectorSpread,
+  'same-bank': succession.sameBank,
+  'same-throw': succession.sameThrow,
+  'next-throw': succession.nextThrow,
   'reciprocating-mass': balance.reciprocatingMass,
   'rotating-mass': balance.rotatingMass,
   'bob-weight': balance.bobWeight,
@@ -62,6 +95,8 @@ export const explained = {
   'residual-static': balance.residualStatic,
   'residual-couple': balance.residualCouple,
   'permissible-residual': balance.permissibleResidual,
+  'plane-residual': planes.planeResidual,
+  'plane-permissible': planes.planePermissible,
 } satisfies Record<string, (engine: Engine) => Draft>
 
 export type FigureId = keyof typeof explained

@@ -1,7 +1,7 @@
 import { massSplit } from '../balance'
 import type { Engine } from './engine'
 import { symbol, type Draft } from './explanation'
-import { handbook, massless, newton, steady } from './words'
+import { handbook, massless, newton, steady, twoMass } from './words'
 
 const MPA = 1e-6
 const MM = 1000
@@ -180,4 +180,24 @@ function exactSecond({ train, cylinder, pin, plan }: Engine, lambda: number): nu
   const mass = massSplit(train.cylinders[cylinder]).reciprocating
   const series = lambda + lambda ** 3 / 4 + (15 * lambda ** 5) / 128
   return mass * train.throws[pin].radius * plan.speed ** 2 * series
+}
+
+/** Force along the rod as two masses, pull positive. */
+export function rodPull(engine: Engine): Draft {
+  const { train, instant, cylinder } = engine
+  const { reciprocating } = massSplit(train.cylinders[cylinder])
+  return {
+    title: 'Pull along the rod',
+    quantity: 'force',
+    unit: 'N',
+    formula: '−(gas force + mass × acceleration) / cos(rod angle)',
+    symbols: [
+      gas(engine),
+      symbol('mass', 'piston with all that goes to and fro', reciprocating, 'kg'),
+      pistonAcceleration(engine),
+      symbol('rod angle', 'angle of the rod', (instant.rodAngle[cylinder] * 180) / Math.PI, '°'),
+    ],
+    assumptions: ['Below 0 the rod is pushed.', twoMass, steady, massless],
+    source: handbook,
+  }
 }

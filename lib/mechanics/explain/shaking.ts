@@ -4,6 +4,7 @@ import { buildInstant, buildPlan, fillInstant } from '../plan'
 import type { Train } from '../train'
 import type { Engine } from './engine'
 import { symbol, type Draft } from './explanation'
+import { evaluate } from './formula'
 import { newton, sampledEachDegree, steady } from './words'
 
 /** The shaking of one part of the train alone, at the asked angle. */
@@ -137,3 +138,32 @@ export const orderForward = (engine: Engine) => phasor(engine, 'forward', 'force
 export const orderBackward = (engine: Engine) => phasor(engine, 'backward', 'force')
 export const orderCoupleForward = (engine: Engine) => phasor(engine, 'forward', 'couple')
 export const orderCoupleBackward = (engine: Engine) => phasor(engine, 'backward', 'couple')
+
+/** Half axes of the ellipse that an order draws: forward and backward add up, and pull apart. */
+function axis(engine: Engine, kind: 'force' | 'couple', which: 'long' | 'short'): Draft {
+  const { quantity, unit, assumptions, source, title } = phasor(engine, 'forward', kind)
+  const of = (sense: Sense) => {
+    const { formula, symbols } = phasor(engine, sense, kind)
+    return evaluate(formula, Object.fromEntries(symbols.map(({ symbol: word, value }) => [word, value])))
+  }
+  return {
+    title: title.replace('turning forward', `${which} axis`),
+    quantity,
+    unit,
+    formula: which === 'long' ? 'forward + backward' : 'root((forward − backward)²)',
+    symbols: [
+      symbol('forward', 'what turns with the crank', of('forward'), unit),
+      symbol('backward', 'what turns against the crank', of('backward'), unit),
+    ],
+    assumptions: [
+      'Together they draw an ellipse: its half axes are their sum and their difference.',
+      ...assumptions.slice(1),
+    ],
+    source,
+  }
+}
+
+export const orderLongAxis = (engine: Engine) => axis(engine, 'force', 'long')
+export const orderShortAxis = (engine: Engine) => axis(engine, 'force', 'short')
+export const orderCoupleLongAxis = (engine: Engine) => axis(engine, 'couple', 'long')
+export const orderCoupleShortAxis = (engine: Engine) => axis(engine, 'couple', 'short')

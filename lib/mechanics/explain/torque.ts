@@ -61,3 +61,24 @@ export function torquePeak(engine: Engine): Draft {
     source: handbook,
   }
 }
+
+export function meanPower(engine: Engine): Draft {
+  const { torque: signal } = engine.cycle()
+  return {
+    title: 'Power of the mean turning moment',
+    quantity: 'power',
+    unit: 'kW',
+    formula: 'mean × speed / 1000',
+    symbols: [
+      symbol(
+        'mean',
+        'turning moment, mean of the cycle',
+        signal.reduce((sum, each) => sum + each, 0) / signal.length,
+        'N m',
+      ),
+      symbol('speed', 'crank speed', engine.plan.speed, 'rad/s'),
+    ],
+    assumptions: ['Nothing is taken off for what the engine drives.', sampledEachDegree, massless],
+    source: handbook,
+  }
+}

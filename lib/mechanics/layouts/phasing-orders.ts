@@ -20,6 +20,18 @@ export type Admits = (unevenness: number, sameBank: number, nearThrow: number) =
 /** `late` has a bit for each cylinder that fires in the second turn. */
 export type Found = (figures: OrderFigures, late: number) => void
 
+/** A beginning: its last cylinder in either turn and the first of the second, −1 for none; its intervals, counts and `late`. */
+type Close = (
+  last0: number,
+  last1: number,
+  first1: number,
+  most: number,
+  least: number,
+  sums: number,
+  late: number,
+) => void
+type Place = (rank: number, ...beginning: Parameters<Close>) => void
+
 /**
  * Goes through the firing orders of phasings of one space: every cylinder fires at its top dead centre in one of the
  * cycle's turns, the first cylinder in the first, no two at once. Cylinders are put in place by rising top dead centre, so
@@ -51,15 +63,7 @@ export function orderSearch(space: Space) {
   let found: Found
   let reached = 0
 
-  const close = (
-    last0: number,
-    last1: number,
-    first1: number,
-    most: number,
-    least: number,
-    sums: number,
-    late: number,
-  ) => {
+  const close: Close = (last0, last1, first1, most, least, sums, late) => {
     const first = ranked[0]
     const end = last1 < 0 ? last0 : last1
     const seam = cycle - tops[end] - (last1 < 0 ? 0 : TURN)
@@ -85,16 +89,7 @@ export function orderSearch(space: Space) {
     return bankPairs[at] + (throwPairs[at] << 8) + (nearPairs[at] << 16)
   }
 
-  const place = (
-    rank: number,
-    last0: number,
-    last1: number,
-    first1: number,
-    most: number,
-    least: number,
-    sums: number,
-    late: number,
-  ): void => {
+  const place: Place = (rank, last0, last1, first1, most, least, sums, late) => {
     if (rank === cylinders) return close(last0, last1, first1, most, least, sums, late)
     const cylinder = ranked[rank]
     for (let turn = 0; turn < (twoTurns && rank > 0 ? 2 : 1); turn++) {
