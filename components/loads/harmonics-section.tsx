@@ -15,8 +15,7 @@ import { formatNumber, formatQuantity, quantityText } from '@/lib/units/format'
 import { toSi } from '@/lib/units/units'
 import { useResults, useSessionState } from '@/scene/session/react'
 import { DEGREES, quantityAxis } from '@/components/figures/axis'
-
-const orderText = (order: number) => formatNumber(order, { decimals: order % 1 === 0 ? 0 : 1 })
+import { orderText } from './order-text'
 
 /** Torque by orders, and how the cylinders stand to each other at one of them. */
 export function HarmonicsSection({ parts }: { parts: CycleParts }) {

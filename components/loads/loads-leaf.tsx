@@ -8,6 +8,7 @@ import { BearingSection } from './bearing-section'
 import { HarmonicsSection } from './harmonics-section'
 import { MethodSection } from './method-section'
 import { SweepSection } from './sweep-section'
+import { TorsionSection } from './torsion-section'
 import { TurningSection } from './turning-section'
 
 /** Loads of the bearings, turning moment, its harmonics, and what grows with speed. */
@@ -25,6 +26,7 @@ export function LoadsLeaf() {
       <HarmonicsSection parts={parts} />
       <SweepSection parts={parts} />
       <MethodSection parts={parts} />
+      <TorsionSection parts={parts} />
     </Leaf>
   )
 }

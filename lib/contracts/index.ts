@@ -15,6 +15,7 @@ import { sceneOperations } from './scenes'
 import { shareLinkOperations } from './share-links'
 import { speedSweep } from './speed-sweeps'
 import { systemOperations } from './system'
+import { torsionalModes } from './torsional-modes'
 import { turningMoment } from './turning-moment'
 
 /** Every operation of the HTTP interface. */
@@ -25,6 +26,7 @@ export const allOperations: readonly OperationContract[] = [
   bearingLoads,
   turningMoment,
   speedSweep,
+  torsionalModes,
   explain,
   ...firingOperations,
   findLayouts,

@@ -24,6 +24,8 @@ const written: Partial<Record<UnitName, UnitName>> = {
   lbf: 'N',
   'kN m': 'N m',
   'lbf ft': 'N m',
+  'kN m/rad': 'N m/rad',
+  'lbf ft/rad': 'N m/rad',
   kJ: 'J',
   'ft lbf': 'J',
   hp: 'kW',

@@ -103,6 +103,13 @@ const specs = {
     si: [{ unit: 'MPa', digits: three }],
     us: [{ unit: 'psi', digits: three }],
   },
+  modulus: {
+    name: 'a shear modulus',
+    example: '79 GPa',
+    accepts: ['GPa', 'MPa', 'psi'],
+    si: [{ unit: 'GPa', digits: d(1) }],
+    us: [{ unit: 'psi', digits: three }],
+  },
   force: {
     name: 'a force',
     example: '44 kN or 9,890 lbf',
@@ -122,6 +129,16 @@ const specs = {
       { unit: 'kN m', digits: three, from: 10000 },
     ],
     us: [{ unit: 'lbf ft', digits: three }],
+  },
+  torsionalStiffness: {
+    name: 'a torsional stiffness',
+    example: '850 kN m/rad',
+    accepts: ['N m/rad', 'kN m/rad', 'lbf ft/rad'],
+    si: [
+      { unit: 'N m/rad', digits: three },
+      { unit: 'kN m/rad', digits: three, from: 10000 },
+    ],
+    us: [{ unit: 'lbf ft/rad', digits: three }],
   },
   energy: {
     name: 'an energy',

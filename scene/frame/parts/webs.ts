@@ -48,7 +48,11 @@ function reachOf(outline: Outline): number {
 /** Angle in a part's own plane of a direction that stands `angle` ahead of its y axis in the sense of rotation. */
 const planeTurn = (angle: number, mirror: -1 | 1) => -mirror * angle
 
-function outlineOf({ train, shape, mirror }: Room, web: Web): Outline {
+/** Of a whole web, in the coordinates of its throw. */
+export function outlineOf(
+  { train, shape, mirror }: Pick<Room, 'train' | 'shape' | 'mirror'>,
+  web: Web,
+): Outline {
   const first = train.throws[web.throw]
   const own = webOutline(shape, first.radius)
   if (web.other < 0) return own

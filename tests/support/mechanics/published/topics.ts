@@ -6,6 +6,7 @@ import { forces } from './forces'
 import { gas } from './gas'
 import { kinematics } from './kinematics'
 import { standards } from './standards'
+import { torsion } from './torsion'
 
 /** What of the published figures is run through the kernel, by topic. */
 export const topics: Record<string, Record<string, Case>> = {
@@ -16,4 +17,5 @@ export const topics: Record<string, Record<string, Case>> = {
   flywheel,
   'gas and cycle': gas,
   'standards and practice': standards,
+  'torsional vibration': torsion,
 }
