@@ -1,7 +1,7 @@
 import type { Train } from '@/lib/mechanics/train'
 import { polarMoment } from '@/lib/mechanics/torsion/shaft-stiffness'
 import type { CrankLayout, Stretch } from './crank-layout'
-import { polarArea } from './mesh/outline'
+import { polarArea } from './mesh/polar-area'
 import { outlineOf } from './parts/webs'
 import { STEEL, type Shape } from './shape'
 

@@ -95,8 +95,9 @@ test('a forgotten password is set anew with the link of the mail, once', async (
   await signUp(page, stranger)
   await guest.goto('/sign-in')
   await guest.getByRole('link', { name: 'Forgotten password' }).click()
-  await guest.getByLabel('Mail address').fill(stranger.email)
-  await guest.getByRole('button', { name: 'Send link' }).click()
+  const form = guest.getByRole('form', { name: 'Forgotten password' })
+  await form.getByLabel('Mail address').fill(stranger.email)
+  await form.getByRole('button', { name: 'Send link' }).click()
   await expect(guest.getByRole('heading', { name: 'A mail is on its way' })).toBeVisible()
 
   await guest.goto('/local/mail')

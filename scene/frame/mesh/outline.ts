@@ -77,17 +77,6 @@ export function areaMoments(outline: Outline): { area: number; x: number; y: num
   return { area, x, y }
 }
 
-/** Second moment of area about the origin, ∫(x² + y²) dA. */
-export function polarArea(outline: Outline): number {
-  let sum = 0
-  for (let i = 0; i < outline.length; i += 2) {
-    const j = (i + 2) % outline.length
-    const [ax, ay, bx, by] = [outline[i], outline[i + 1], outline[j], outline[j + 1]]
-    sum += ((ax * by - ay * bx) * (ax * ax + ax * bx + bx * bx + ay * ay + ay * by + by * by)) / 12
-  }
-  return sum
-}
-
 /** Is the joint at point i (counted in points) of a closed or open polyline a corner? */
 export function isCorner(line: Outline, i: number, closed: boolean): boolean {
   const count = line.length / 2
