@@ -10,7 +10,7 @@ const root = join(dirname(fileURLToPath(import.meta.url)), '..')
 
 async function main() {
   await ensurePackages(root)
-  const { bench, installPrograms, lanes, stages } = await import('./stages.mjs')
+  const { bench, installPrograms, stages, turns } = await import('./stages.mjs')
   const all = { ...stages, bench }
   const words = process.argv.slice(2)
   const chosen = words.filter((word) => all[word])
@@ -48,11 +48,12 @@ async function main() {
       }
     else {
       await installPrograms()
-      await Promise.all(
-        lanes.map(async (lane) => {
-          for (const name of lane) await runQuietly(name)
-        }),
-      )
+      for (const lanes of turns)
+        await Promise.all(
+          lanes.map(async (lane) => {
+            for (const name of lane) await runQuietly(name)
+          }),
+        )
     }
   } finally {
     await stopEverything()

@@ -146,10 +146,16 @@ export const stages = {
   e2e: (asked) => e2e(asked),
 }
 
-/** All stages, for two cores: what needs no build, beside what is built and run. */
-export const lanes = [
-  ['format', 'lint', 'canaries', 'cycles', 'unit', 'golden', 'rendering', 'integration'],
-  ['types', 'pure-types', 'build', 'e2e'],
+/**
+ * All stages, for two cores, turn after turn; the lanes of a turn run side by side. First what needs no build beside what
+ * is built and run; then alone, on a quiet machine, what starts and kills servers.
+ */
+export const turns = [
+  [
+    ['format', 'lint', 'canaries', 'cycles', 'unit', 'golden', 'rendering'],
+    ['types', 'pure-types', 'build', 'e2e'],
+  ],
+  [['integration']],
 ]
 
 /** What both lanes would otherwise install at once. */
