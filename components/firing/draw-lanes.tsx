@@ -76,7 +76,7 @@ export function drawLanes({ id, width, lanes, window, cycle }: Drawing): Drawn {
   const rule = y
   const parts = width < 400 ? 4 : 8
   return {
-    height: rule + 26,
+    height: rule + 38,
     picture: (
       <>
         <defs>
@@ -102,6 +102,9 @@ export function drawLanes({ id, width, lanes, window, cycle }: Drawing): Drawn {
             </text>
           </Fragment>
         ))}
+        <text className="t xs" x={right} y={rule + 34} textAnchor="end">
+          Crank angle, °
+        </text>
       </>
     ),
     points: { count: places.length, place: (index) => places[index], words: (index) => places[index].words },
