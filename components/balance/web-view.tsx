@@ -4,6 +4,7 @@ import { useRef, type KeyboardEvent, type PointerEvent } from 'react'
 import { halfDiscMoment, type WebRoom } from '@/lib/mechanics/balance/half-disc'
 import { quantityText } from '@/lib/units/format'
 import { fromSi, toSi } from '@/lib/units/units'
+import { inTrain } from '@/scene/session/path'
 import { useBench, useResults, useSessionState } from '@/scene/session/react'
 
 /** Half the width of the drawing, and the circle on which a weight is all that the web holds. */
@@ -36,12 +37,12 @@ export function WebView({ index, room }: { index: number; room: WebRoom }) {
     if (weight.radius <= 0) return
     const momentKgMm = Math.max(0, Number(fromSi(wanted, 'kg mm').toPrecision(5)))
     const angleDeg = Number((((fromSi(angle, '°') % 360) + 360) % 360).toFixed(1))
-    const path = ['train', 'counterweights', index]
+    const path = ['counterweights', index]
     session.edit(
-      [
+      inTrain([
         { path: [...path, 'massKg'], value: momentKgMm / fromSi(weight.radius, 'mm') },
         { path: [...path, 'angleDeg'], value: angleDeg },
-      ],
+      ]),
       `web.${index}.${gestures.current}`,
     )
   }

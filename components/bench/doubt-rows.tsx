@@ -3,6 +3,7 @@
 import { useState } from 'react'
 import { StatusMark } from '@/components/ui/icon'
 import { acknowledge, acknowledgementOf, withdraw, type Doubt } from '@/scene/model/doubts'
+import { inTrain } from '@/scene/session/path'
 import { useBench, useSessionState } from '@/scene/session/react'
 
 /** Where the words about a row stand, for the field to point at. */
@@ -67,7 +68,7 @@ function DoubtNote({ doubt }: { doubt: Doubt }) {
               type="button"
               className="btn sm"
               onClick={() =>
-                session.edit(mend.changes.map(({ path, value }) => ({ path: ['train', ...path], value })))
+                session.edit(inTrain(mend.changes))
               }
             >
               {mend.label}

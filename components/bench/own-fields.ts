@@ -2,7 +2,7 @@ import type { UnitName } from '@/lib/units/units'
 import type { CrankTrain } from '@/scene/model/crank-train'
 import type { Scene } from '@/scene/model/scene'
 import type { QuantityField } from '@/scene/session/field'
-import type { Change } from '@/scene/session/path'
+import type { Change, ScenePath } from '@/scene/session/path'
 import { plainField } from '@/scene/session/plain-field'
 import { fields } from './fields'
 
@@ -49,7 +49,7 @@ export const ownNames = specs.map(({ common }, index) => ({ index, name: common.
 /** The value `which` of cylinder `cylinder`, as a field. */
 export function ownField(which: number, cylinder: number): OwnField {
   const { common, unit, at } = specs[which]
-  const entry = ['train', 'cylinders', cylinder]
+  const entry: ScenePath = ['train', 'cylinders', cylinder]
   const [name, part] = at
   const set = (train: CrankTrain, value: number | undefined): Change[] => {
     if (name !== 'rod') return [{ path: [...entry, name], value }]

@@ -4,7 +4,7 @@ import type { UnitName } from '@/lib/units/units'
 import type { CrankTrain } from '@/scene/model/crank-train'
 import type { Scene } from '@/scene/model/scene'
 import type { QuantityField } from '@/scene/session/field'
-import type { Change } from '@/scene/session/path'
+import type { Change, ScenePath } from '@/scene/session/path'
 import {
   addBalanceShaft,
   addBank,
@@ -119,7 +119,7 @@ const master: Column = {
   changes(value, { train }, index) {
     const cylinder = train.cylinders[index]
     const on = train.cylinders.find(({ id }) => id === value)
-    const place = ['train', 'cylinders', index]
+    const place: ScenePath = ['train', 'cylinders', index]
     if (!on)
       return [
         { path: [...place, 'link'], value: undefined },

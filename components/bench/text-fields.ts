@@ -3,6 +3,7 @@ import { parseQuantity } from '@/lib/units/parse'
 import type { Scene } from '@/scene/model/scene'
 import type { Doubt, Field, Reading } from '@/scene/session/field'
 import { orderSlip } from '@/scene/session/order-slip'
+import type { Change } from '@/scene/session/path'
 import { splitNames } from '@/scene/session/split-names'
 import { angleSlip } from '@/scene/session/usual'
 
@@ -31,7 +32,7 @@ function angleList(list: 'banks' | 'throws', label: string, word: string): TextF
           message: `${count(parts.length, 'angle')} for ${count(train[list].length, word)}. Write one for each, with / between: ${train[list].map((item) => angle(item.angleDeg)).join('/')}.`,
           mends: [],
         }
-      const changes = []
+      const changes: Change[] = []
       let turned: Doubt | null = null
       for (const [i, part] of parts.entries()) {
         const parsed = parseQuantity(part, 'angle', '°')

@@ -11,6 +11,7 @@ import { formatQuantity, quantityText } from '@/lib/units/format'
 import type { ListedClearance } from '@/scene/frame/clearance-list'
 import { clearanceMends, type ClearanceMend } from '@/scene/frame/clearance-mends'
 import { clearanceAssumption, clearanceSentence, inSentence } from '@/scene/frame/clearance-words'
+import { inTrain } from '@/scene/session/path'
 import { useBench, useSessionState } from '@/scene/session/react'
 import type { Clearances } from '@/components/figures/use-clearances'
 import { ClearanceMark } from './status'
@@ -31,7 +32,7 @@ export function ChosenClearance({ clearance, onGo, sizes, results }: Props) {
   )
   const take = ({ changes }: ClearanceMend) => {
     session.seal()
-    session.edit(changes.map(({ path, value }) => ({ path: ['train', ...path], value })))
+    session.edit(inTrain(changes))
   }
   const sentence = clearanceSentence(clearance, system)
   return (

@@ -1,14 +1,16 @@
 import type { CrankTrain } from '@/scene/model/crank-train'
 import type { PhasingProposal } from '@/scene/model/read-phasing'
-import type { Change } from '@/scene/session/path'
+import { inTrain, type Change } from '@/scene/session/path'
 
 /** Edits of the document, each one undo step. */
 
 /** Another order; firing angles that cylinders state belong to the old one and go. */
 export const orderChanges = ({ cylinders }: CrankTrain, order: readonly string[]): Change[] => [
   { path: ['train', 'firingOrder'], value: [...order] },
-  ...cylinders.flatMap(({ firesAtDeg }, index) =>
-    firesAtDeg === undefined ? [] : [{ path: ['train', 'cylinders', index, 'firesAtDeg'], value: undefined }],
+  ...inTrain(
+    cylinders.flatMap(({ firesAtDeg }, index) =>
+      firesAtDeg === undefined ? [] : [{ path: ['cylinders', index, 'firesAtDeg'], value: undefined }],
+    ),
   ),
 ]
 
@@ -19,15 +21,17 @@ export const turnsChanges = (
   anglesDeg: readonly number[],
 ): Change[] => [
   { path: ['train', 'firingOrder'], value: [...order] },
-  ...cylinders.map(({ id }, index) => ({
-    path: ['train', 'cylinders', index, 'firesAtDeg'],
-    value: Number(anglesDeg[order.indexOf(id)].toFixed(6)) % (cycle === 'two-stroke' ? 360 : 720),
-  })),
+  ...inTrain(
+    cylinders.map(({ id }, index) => ({
+      path: ['cylinders', index, 'firesAtDeg'],
+      value: Number(anglesDeg[order.indexOf(id)].toFixed(6)) % (cycle === 'two-stroke' ? 360 : 720),
+    })),
+  ),
 ]
 
 /** Throws and the order they fire in, together: neither would be taken without the other. */
 export const phasingChanges = (train: CrankTrain, { order, throws }: PhasingProposal): Change[] => [
-  ...throws.map(({ angleDeg }, index) => ({ path: ['train', 'throws', index, 'angleDeg'], value: angleDeg })),
+  ...inTrain(throws.map(({ angleDeg }, index) => ({ path: ['throws', index, 'angleDeg'], value: angleDeg }))),
   ...orderChanges(train, order),
 ]
 

@@ -4,7 +4,7 @@ import type { CrankTrain } from '@/scene/model/crank-train'
 import { cylinderValues } from '@/scene/model/cylinder-values'
 import type { Scene } from '@/scene/model/scene'
 import { toTrain } from '@/scene/model/to-train'
-import { applyChanges, getAt, type Change } from './path'
+import { applyChanges, getAt, type Change, type ScenePath } from './path'
 
 /**
  * What is held while something else is changed. A way of working, not a property of the engine: it belongs to the
@@ -19,11 +19,11 @@ export interface Locks {
 
 export const noLocks: Locks = { displacement: false, deck: false }
 
-const bore = ['train', 'cylinderDefaults', 'boreMm']
-const stroke = ['train', 'cylinderDefaults', 'strokeMm']
-const rod = ['train', 'cylinderDefaults', 'rodLengthMm']
-const offset = ['train', 'cylinderDefaults', 'offsetMm']
-const crown = ['train', 'shape', 'compressionHeightMm']
+const bore: ScenePath = ['train', 'cylinderDefaults', 'boreMm']
+const stroke: ScenePath = ['train', 'cylinderDefaults', 'strokeMm']
+const rod: ScenePath = ['train', 'cylinderDefaults', 'rodLengthMm']
+const offset: ScenePath = ['train', 'cylinderDefaults', 'offsetMm']
+const crown: ScenePath = ['train', 'shape', 'compressionHeightMm']
 
 /** Swept volume by the true travel, mm³. NaN where the crank cannot turn. */
 export function displacementOf(document: CrankTrain): number {
@@ -55,7 +55,7 @@ export function withFollowers(scene: Scene, changes: Change[], locks: Locks): Ch
   return [...swept, ...(locks.deck ? followDeck(scene, swept) : [])]
 }
 
-const differs = (one: Scene, other: Scene, path: string[]) => getAt(one, path) !== getAt(other, path)
+const differs = (one: Scene, other: Scene, path: ScenePath) => getAt(one, path) !== getAt(other, path)
 
 function followDisplacement(scene: Scene, changes: Change[]): Change[] {
   const next = applyChanges(scene, changes)

@@ -7,7 +7,7 @@ import type { Scene } from '@/scene/model/scene'
 import type { Mend } from './field'
 import { fitOrder, topCentres } from './fit-order'
 import type { Issue } from './judge'
-import { applyChanges, type Change } from './path'
+import { applyChanges, inTrain, type Change } from './path'
 
 interface Attempt {
   /** The field that was typed in, and the changes that were refused. */
@@ -86,10 +86,9 @@ function strokeMend(train: CrankTrain, { key, changes }: Attempt): Mend[] {
   const sharing = train.cylinders.flatMap((cylinder, index) =>
     cylinder.throw === typed.throw && cylinder !== typed ? [index] : [],
   )
-  const more = sharing.map((index) => ({
-    path: ['train', 'cylinders', index, 'strokeMm'],
-    value: typed.strokeMm,
-  }))
+  const more = inTrain(
+    sharing.map((index) => ({ path: ['cylinders', index, 'strokeMm'], value: typed.strokeMm })),
+  )
   return [{ label: `Use it for all on throw ${typed.throw}`, changes: [...changes, ...more] }]
 }
 

@@ -1,7 +1,7 @@
 import type { Quantity } from '@/lib/units/quantities'
 import type { UnitName } from '@/lib/units/units'
 import { quantityField, type QuantityField, type QuantityFieldOptions } from './field'
-import { getAt, type Path } from './path'
+import { getAt, type Path, type ScenePath } from './path'
 
 /** A field that reads and writes one number of the train. */
 export function plainField(
@@ -11,7 +11,7 @@ export function plainField(
   documentUnit: UnitName,
   more: Partial<QuantityFieldOptions> = {},
 ): QuantityField {
-  const full: Path = ['train', ...path]
+  const full: ScenePath = ['train', ...path]
   return quantityField({
     key: path.join('.'),
     label,

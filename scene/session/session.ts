@@ -2,7 +2,7 @@ import { createStore, type StoreApi } from 'zustand/vanilla'
 import type { System } from '@/lib/units/quantities'
 import type { Scene } from '@/scene/model/scene'
 import type { Field, Mend } from './field'
-import { applyChanges, type Change } from './path'
+import { applyChanges, inTrain, type Change } from './path'
 import { judge, type Issue } from './judge'
 import { noLocks, withFollowers, type Locks } from './locks'
 import { mendsFor } from './mends'
@@ -237,7 +237,7 @@ export function createSession(start: SessionStart): Session {
 /** What a doubt offers comes after what was typed: throws and the order that fits them go in together. */
 const withMend = ({ label, changes: more }: Standing, typed: Change[]): Mend => ({
   label,
-  changes: [...typed, ...more.map(({ path, value }) => ({ path: ['train', ...path], value }))],
+  changes: [...typed, ...inTrain(more)],
 })
 
 type Taken = { issues: Issue[] } | { issues?: undefined; scene: Scene; refused: Record<string, Refusal> }

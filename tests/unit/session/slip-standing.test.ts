@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest'
+import { inTrain } from '@/scene/session/path'
 import { standingDoubts } from '@/scene/session/standing'
 import { start, type Session } from './slip-bench'
 
@@ -109,8 +110,7 @@ describe('what is unusual stands in the list', () => {
       for (const said of says) expect(`${doubt.head} ${doubt.message}`).toContain(said)
       expect(doubt.mend?.label).toBe(mend)
       if (!doubt.mend) return
-      const pressed = doubt.mend.changes.map(({ path, value }) => ({ path: ['train', ...path], value }))
-      expect(session.edit(pressed)).toBe(true)
+      expect(session.edit(inTrain(doubt.mend.changes))).toBe(true)
       expect(doubts()).toEqual([])
       session.undo()
       expect(doubts()).toEqual([doubt])

@@ -47,7 +47,7 @@ describe('no drift (D-02)', () => {
           quantity: 'length',
           documentUnit: 'mm',
           get: () => mm,
-          changes: (value) => [{ path: ['x'], value }],
+          changes: (value) => [{ path: ['train', 'x'], value }],
         })
         for (const system of ['si', 'us'] as const) {
           const shown = field.show(scene, system)
