@@ -9,6 +9,11 @@ const project = (name: string, more: object = {}) => ({
   test: { name, include: [`tests/${name}/**/*.test.{ts,tsx}`], ...more },
 })
 
+/** Tests of pure code may share the modules that they load: loading them took as long as half the tests. */
+const shared = { isolate: false }
+/** What measures the heap wants a process to itself. */
+const alone = 'tests/unit/**/*.alone.test.ts'
+
 export default defineConfig({
   root,
   cacheDir: `${root}node_modules/.vitest`,
@@ -24,10 +29,11 @@ export default defineConfig({
     testTimeout: 30_000,
     hookTimeout: 60_000,
     projects: [
-      project('unit'),
+      project('unit', { ...shared, exclude: [alone] }),
+      project('alone', { include: [alone] }),
       project('bench', { include: [], benchmark: { include: ['tests/bench/**/*.bench.ts'] } }),
-      project('golden'),
-      project('rendering'),
+      project('golden', shared),
+      project('rendering', shared),
       project('integration', { globalSetup: `${support}cluster.mjs` }),
     ],
   },
