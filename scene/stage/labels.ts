@@ -67,11 +67,13 @@ export function createLabels(layer: HTMLElement): Labels {
       layer.prepend(...elements)
       state = new Float64Array(6 * specs.length).fill(NaN)
       wanted = new Uint8Array(specs.length)
-      shown = new Uint8Array(specs.length).fill(1)
+      shown = new Uint8Array(specs.length)
       elements.forEach((element, i) => {
         state[6 * i] = element.offsetWidth
         state[6 * i + 1] = element.offsetHeight
       })
+      // measured as they will stand, and out of sight until a picture says where that is
+      for (const element of elements) element.hidden = true
     },
     begin(next) {
       wanted.fill(0)
