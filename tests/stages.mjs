@@ -5,6 +5,7 @@ import { serverPrograms } from '../db/server/binaries.mjs'
 import { beganAt, freePort, run, startGroup, until } from '../db/server/processes.mjs'
 import { runCanaries } from './quality/canaries.mjs'
 import { ensureChromium } from './support/chromium.mjs'
+import { startRoundRobin } from './support/round-robin.mjs'
 
 const distDir = '.next-test'
 const pass = { passed: 1, failed: 0 }
@@ -53,21 +54,34 @@ const vitest =
     return reported(report, tool('vitest'), args, { cwd: root, env: environment, stdio }, countVitest)
   }
 
-/** The program as people start it, with data and a port of its own; `stop()` tells whether it went cleanly. */
+const healthy = (address) =>
+  fetch(`${address}/api/v1/health`).then(
+    ({ ok }) => ok,
+    () => false,
+  )
+
+/**
+ * The program as people start it, with data of its own: two web servers, whose turn it is one after the other whatever is
+ * asked, and two workers. `stop()` tells whether it went cleanly and whether both servers had something to do.
+ */
 async function startProgram({ root, folder, stdio }) {
-  const port = await freePort()
+  const ports = [await freePort(), await freePort()]
+  const servers = ports.map((port) => `http://127.0.0.1:${port}`)
+  const { address, counts, stop } = await startRoundRobin(servers)
   const dataFolder = join(folder, 'data')
   mkdirSync(dataFolder)
-  const env = { ...environment, PORT: String(port), COUNTERTHROW_DATA: dataFolder, RATE_LIMIT: 'off' }
+  const env = {
+    ...environment,
+    PORT: ports.join(),
+    WORKERS: '2',
+    COUNTERTHROW_ORIGIN: address,
+    COUNTERTHROW_DATA: dataFolder,
+    RATE_LIMIT: 'off',
+  }
   const program = startGroup(process.execPath, ['db/server/start.mjs'], { cwd: root, env, stdio })
-  const address = `http://127.0.0.1:${port}`
   const up = await until(
-    () =>
-      beganAt(program.pid) === null ||
-      fetch(`${address}/api/v1/health`).then(
-        ({ ok }) => ok,
-        () => false,
-      ),
+    async () =>
+      beganAt(program.pid) === null || (await Promise.all(servers.map(healthy))).every((answer) => answer),
     300_000,
     200,
   )
@@ -77,8 +91,10 @@ async function startProgram({ root, folder, stdio }) {
     address,
     async stop() {
       await program.stop()
+      stop()
       const { code } = await program.ended
-      return code === 0 && running.length > 1 && running.every(({ pid }) => beganAt(pid) === null)
+      const busy = counts.every((count) => count > 0)
+      return code === 0 && busy && running.length === 5 && running.every(({ pid }) => beganAt(pid) === null)
     },
   }
 }
@@ -135,10 +151,11 @@ export const stages = {
     [tool('tsc'), '--noEmit', '-p', 'tests/quality/tsconfig.next.json'],
   ),
   'pure-types': gate([tool('tsc'), '--noEmit', '-p', 'tests/quality/tsconfig.pure.json']),
-  unit: vitest('unit'),
+  unit: vitest('unit', 'alone'),
   golden: vitest('golden'),
   rendering: vitest('rendering'),
   integration: vitest('integration'),
+  servers: vitest('servers'),
   build: async ({ root }) => {
     await ensureBuild(root, distDir)
     return pass
@@ -147,15 +164,16 @@ export const stages = {
 }
 
 /**
- * All stages, for two cores, turn after turn; the lanes of a turn run side by side. First what needs no build beside what
- * is built and run; then alone, on a quiet machine, what starts and kills servers.
+ * All stages, for two cores, turn after turn; the lanes of a turn run side by side. The browser tests are two at a time and
+ * have the machine to themselves, and so has, at last, what starts and kills servers.
  */
 export const turns = [
   [
     ['format', 'lint', 'canaries', 'cycles', 'unit', 'golden', 'rendering'],
-    ['types', 'pure-types', 'build', 'e2e'],
+    ['types', 'pure-types', 'build', 'integration'],
   ],
-  [['integration']],
+  [['e2e']],
+  [['servers']],
 ]
 
 /** What both lanes would otherwise install at once. */

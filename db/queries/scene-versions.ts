@@ -1,11 +1,13 @@
 import { and, desc, eq, lt } from 'drizzle-orm'
 import type { Transaction } from '../client'
-import { sceneVersions, users } from '../schema'
+import { sceneVersions, users, versionStates } from '../schema'
+import { itsState, stateOfVersion } from './version-state'
 
 const summary = {
   number: sceneVersions.number,
   parent: sceneVersions.parent,
   message: sceneVersions.message,
+  state: stateOfVersion,
   author: users.name,
   createdAt: sceneVersions.createdAt,
 }
@@ -15,6 +17,7 @@ export async function versionOf(tx: Transaction, sceneId: string, number: number
     .select({ ...summary, document: sceneVersions.document })
     .from(sceneVersions)
     .innerJoin(users, eq(users.id, sceneVersions.authorId))
+    .leftJoin(versionStates, itsState)
     .where(and(eq(sceneVersions.sceneId, sceneId), eq(sceneVersions.number, number)))
   return version
 }
@@ -31,6 +34,7 @@ export async function pageOfVersions(
     .select(summary)
     .from(sceneVersions)
     .innerJoin(users, eq(users.id, sceneVersions.authorId))
+    .leftJoin(versionStates, itsState)
     .where(
       and(
         eq(sceneVersions.sceneId, sceneId),

@@ -1,7 +1,8 @@
 import { and, asc, desc, eq, isNotNull, isNull, sql, type SQL } from 'drizzle-orm'
 import type { sceneLayouts, sceneSorts, sceneStates } from '@/lib/contracts/scenes'
 import type { Transaction } from '../client'
-import { folded, scenes, sceneVersions, users } from '../schema'
+import { folded, scenes, sceneVersions, users, versionStates } from '../schema'
+import { itsState, stateOfVersion } from './version-state'
 
 const row = {
   id: scenes.id,
@@ -17,6 +18,7 @@ const row = {
   displacementCc: sceneVersions.displacementCc,
   document: sceneVersions.document,
   message: sceneVersions.message,
+  state: stateOfVersion,
   savedAt: sceneVersions.createdAt,
   savedBy: users.name,
 }
@@ -30,6 +32,7 @@ const withHead = (tx: Transaction) =>
       and(eq(sceneVersions.sceneId, scenes.id), eq(sceneVersions.number, scenes.headVersion)),
     )
     .innerJoin(users, eq(users.id, sceneVersions.authorId))
+    .leftJoin(versionStates, itsState)
     .$dynamic()
 
 export type SceneRow = Awaited<ReturnType<typeof withHead>>[number]

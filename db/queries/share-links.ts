@@ -1,10 +1,14 @@
 import { and, desc, eq, gt, isNull, or, sql } from 'drizzle-orm'
 import type { Transaction } from '../client'
-import { scenes, sceneVersions, shareLinks, users, workshops } from '../schema'
+import { linkQuestions, scenes, shareLinks, users, workshops } from '../schema'
 
 const links = (tx: Transaction) =>
   tx
-    .select({ link: shareLinks, createdBy: users.name })
+    .select({
+      link: shareLinks,
+      createdBy: users.name,
+      questions: tx.$count(linkQuestions, eq(linkQuestions.linkId, shareLinks.id)),
+    })
     .from(shareLinks)
     .innerJoin(users, eq(users.id, shareLinks.createdBy))
     .$dynamic()
@@ -27,28 +31,36 @@ export const liveLink = (tokenHash: string) =>
     or(isNull(shareLinks.endsAt), gt(shareLinks.endsAt, sql`now()`)),
   )
 
-/** What a live link opens. */
-export async function sceneBehindLink(tx: Transaction, tokenHash: string) {
+/** The sites that may show a live link in a frame; none for one that is not live. */
+export async function framesOf(tx: Transaction, tokenHash: string): Promise<string[]> {
+  const [found] = await tx
+    .select({ origins: shareLinks.frameOrigins })
+    .from(shareLinks)
+    .where(liveLink(tokenHash))
+  return found?.origins ?? []
+}
+
+/** A live link and where it leads: the version that it shows of its scene. */
+export async function liveLinkBy(tx: Transaction, tokenHash: string) {
   const [found] = await tx
     .select({
+      id: shareLinks.id,
+      kind: shareLinks.kind,
+      passwordHash: shareLinks.passwordHash,
+      frameOrigins: shareLinks.frameOrigins,
+      endsAt: shareLinks.endsAt,
+      pinned: shareLinks.version,
       sceneId: scenes.id,
       title: scenes.title,
+      headVersion: scenes.headVersion,
+      workshopId: workshops.id,
       workshop: workshops.name,
-      endsAt: shareLinks.endsAt,
-      version: sceneVersions.number,
-      savedAt: sceneVersions.createdAt,
-      document: sceneVersions.document,
+      openingsKeptDays: workshops.openingsKeptDays,
     })
     .from(shareLinks)
     .innerJoin(scenes, eq(scenes.id, shareLinks.sceneId))
     .innerJoin(workshops, eq(workshops.id, scenes.workshopId))
-    .innerJoin(
-      sceneVersions,
-      and(
-        eq(sceneVersions.sceneId, scenes.id),
-        eq(sceneVersions.number, sql`coalesce(${shareLinks.version}, ${scenes.headVersion})`),
-      ),
-    )
     .where(liveLink(tokenHash))
   return found
 }
+export type LiveLink = NonNullable<Awaited<ReturnType<typeof liveLinkBy>>>

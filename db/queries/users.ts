@@ -6,3 +6,8 @@ export async function userByEmail(tx: Transaction, email: string) {
   const [user] = await tx.select().from(users).where(eq(users.email, email))
   return user
 }
+
+export async function userById(tx: Transaction, id: string) {
+  const [user] = await tx.select().from(users).where(eq(users.id, id))
+  return user
+}

@@ -19,6 +19,7 @@ export const auditLog = pgTable(
   },
   (table) => [
     index('audit_log_workshop').on(table.workshopId, table.id),
+    index('audit_log_actor').on(table.workshopId, table.actorId, table.id),
     index('audit_log_subject').on(table.subject, table.id),
   ],
 )

@@ -1,5 +1,5 @@
 import { randomBytes } from 'node:crypto'
-import { timestamp, uuid } from 'drizzle-orm/pg-core'
+import { customType, timestamp, uuid } from 'drizzle-orm/pg-core'
 
 /** A UUID of version 7 (RFC 9562): begins with the time, so that keys grow and pages of an index fill in order. */
 export function newId(): string {
@@ -16,3 +16,10 @@ export const idColumn = () => uuid('id').primaryKey().$defaultFn(newId)
 /** Milliseconds, as in JavaScript, so that a time read, sent and handed back as a cursor is the same time. */
 export const instant = (name: string) => timestamp(name, { withTimezone: true, precision: 3 })
 export const createdAt = () => instant('created_at').notNull().defaultNow()
+
+/** A file kept in the database, where every server sees it. */
+export const bytes = customType<{ data: Uint8Array<ArrayBuffer>; driverData: Buffer }>({
+  dataType: () => 'bytea',
+  toDriver: (value) => Buffer.from(value),
+  fromDriver: (value) => Uint8Array.from(value),
+})

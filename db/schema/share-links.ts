@@ -1,9 +1,11 @@
 import { sql } from 'drizzle-orm'
-import { check, foreignKey, index, integer, pgTable, text, uuid } from 'drizzle-orm/pg-core'
+import { check, foreignKey, index, integer, pgEnum, pgTable, text, uuid } from 'drizzle-orm/pg-core'
 import { createdAt, idColumn, instant } from './columns'
 import { sceneVersions } from './scene-versions'
 import { scenes } from './scenes'
 import { users } from './users'
+
+export const linkKindEnum = pgEnum('link_kind', ['look', 'note', 'decide'])
 
 /** The token itself is never stored, only its SHA-256. Without a version the link follows the scene's head. */
 export const shareLinks = pgTable(
@@ -15,7 +17,15 @@ export const shareLinks = pgTable(
       .references(() => scenes.id),
     tokenHash: text('token_hash').notNull().unique(),
     label: text('label').notNull(),
+    kind: linkKindEnum('kind').notNull().default('look'),
     version: integer('version'),
+    /** Without one, whoever has the address is let in. */
+    passwordHash: text('password_hash'),
+    /** Sites that may show the link in a frame; none unless named. */
+    frameOrigins: text('frame_origins')
+      .array()
+      .notNull()
+      .default(sql`'{}'::text[]`),
     endsAt: instant('ends_at'),
     revokedAt: instant('revoked_at'),
     opened: integer('opened').notNull().default(0),
@@ -33,6 +43,7 @@ export const shareLinks = pgTable(
       foreignColumns: [sceneVersions.sceneId, sceneVersions.number],
     }),
     check('share_links_hash', sql`${table.tokenHash} ~ '^[0-9a-f]{64}$'`),
+    check('share_links_frames', sql`cardinality(${table.frameOrigins}) <= 20`),
     check('share_links_label', sql`length(${table.label}) <= 120`),
   ],
 )

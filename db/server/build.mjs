@@ -1,6 +1,7 @@
 import { createHash } from 'node:crypto'
 import { existsSync, readFileSync, readdirSync, writeFileSync } from 'node:fs'
 import { join } from 'node:path'
+import { bundleWorker } from './bundle.mjs'
 import { alone } from './lock.mjs'
 import { run } from './processes.mjs'
 
@@ -13,6 +14,7 @@ const sources = [
   'public',
   'package-lock.json',
   'next.config.mjs',
+  'proxy.ts',
   'postcss.config.mjs',
   'tailwind.config.ts',
   'tsconfig.json',
@@ -59,8 +61,10 @@ export async function ensureBuild(root, distDir) {
     if (current()) return
     console.log('Building …')
     const before = fingerprint(root)
-    const env = nextEnvironment(distDir, { NODE_ENV: 'production' })
+    // builds of the same sources are one build, on whichever machine they were made
+    const env = nextEnvironment(distDir, { NODE_ENV: 'production', COUNTERTHROW_BUILD: before.slice(0, 20) })
     await run(process.execPath, [nextProgram(root), 'build'], { cwd: root, env })
+    await bundleWorker(root, distDir)
     writeFileSync(stamp, before)
   })
 }

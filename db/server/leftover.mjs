@@ -1,12 +1,43 @@
-import { existsSync, readFileSync } from 'node:fs'
-import { join } from 'node:path'
-import { beganAt, stopGroup } from './processes.mjs'
+import { existsSync, readFileSync, readdirSync, readlinkSync, realpathSync } from 'node:fs'
+import { basename, join } from 'node:path'
+import { beganAt, stopGroup, until } from './processes.mjs'
 
 const commandOf = (pid) => {
   try {
     return readFileSync(`/proc/${pid}/cmdline`, 'utf8').split('\0')
   } catch {
     return []
+  }
+}
+
+/** Processes of a server that work in these files: when it is killed, its children may outlive it. */
+function atWorkIn(cluster) {
+  const folder = realpathSync(cluster)
+  return readdirSync('/proc').filter((name) => {
+    if (!/^\d+$/.test(name)) return false
+    try {
+      const program = basename(readlinkSync(`/proc/${name}/exe`)).replace(' (deleted)', '')
+      return program === 'postgres' && readlinkSync(`/proc/${name}/cwd`) === folder && beganAt(name) !== null
+    } catch {
+      return false
+    }
+  })
+}
+
+/** Children of a server that is gone keep the next one out: they are told to end, and waited for as long as it takes. */
+async function stopOrphans(cluster) {
+  const orphans = atWorkIn(cluster)
+  if (orphans.length === 0) return
+  console.log(`Waiting for ${orphans.length} processes that a killed database server has left at work …`)
+  for (const pid of orphans) tell(Number(pid), 'SIGQUIT')
+  await until(() => atWorkIn(cluster).length === 0, Infinity)
+}
+
+function tell(pid, signal) {
+  try {
+    process.kill(pid, signal)
+  } catch (error) {
+    if (error.code !== 'ESRCH') throw error
   }
 }
 
@@ -19,4 +50,5 @@ export async function stopLeftover(cluster) {
   if (pid > 0 && commandOf(pid).includes(cluster)) {
     await stopGroup({ pid, began: beganAt(pid), stopSignal: 'SIGINT' })
   }
+  await stopOrphans(cluster)
 }

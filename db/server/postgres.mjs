@@ -92,17 +92,18 @@ async function launch({ cluster, user, own, settings, logFile }) {
   return { up: outcome === 'up', server, keeperUrl, said: readFileSync(logFile, 'utf8') }
 }
 
-/** The role that the program signs in as owns its database and nothing more. */
+/** The role that the program signs in as owns nothing: the database and all in it are the keeper's. */
 async function ensureDatabase(keeperUrl, password) {
   const [role] = await ask(keeperUrl, `select 1 from pg_roles where rolname = 'app'`)
   if (!role) await ask(keeperUrl, `create role app login password '${password}'`)
   const [database] = await ask(keeperUrl, `select 1 from pg_database where datname = 'counterthrow'`)
-  if (!database) await ask(keeperUrl, 'create database counterthrow owner app')
+  if (!database) await ask(keeperUrl, 'create database counterthrow')
 }
 
 /**
  * Makes (once) and starts the private PostgreSQL server of a data folder. Answers the address for the program
- * (`url`), the one for whoever makes and drops databases (`keeperUrl`), the process and how to stop it.
+ * (`url`), the one of the role that owns everything and alone migrates (`ownerUrl`), the same for whoever makes and drops
+ * databases (`keeperUrl`), the process and how to stop it.
  * `throwaway` trades safety against power cuts for speed: for tests.
  */
 export async function startCluster({ dataFolder, throwaway = false }) {
@@ -133,6 +134,7 @@ export async function startCluster({ dataFolder, throwaway = false }) {
   await ensureDatabase(keeperUrl, own.appPassword)
   return {
     url: address('app', own.appPassword, own.port, 'counterthrow'),
+    ownerUrl: address('keeper', own.keeperPassword, own.port, 'counterthrow'),
     keeperUrl,
     ended: server.ended,
     stop: server.stop,

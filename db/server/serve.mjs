@@ -27,10 +27,10 @@ export async function serve({ root, port, distDir, dev = false, environment }) {
       }
       return null
     },
-    120_000,
+    300_000,
     100,
   )
   if (answer === 'over') throw new Refusal('The web server ended before it answered.')
-  if (!answer) throw new Refusal(`The web server is not healthy after two minutes: ${last}`)
-  return { address, ended: server.ended, stop: server.stop }
+  if (!answer) throw new Refusal(`The web server is not healthy after five minutes: ${last}`)
+  return { address, pid: server.pid, ended: server.ended, stop: server.stop }
 }

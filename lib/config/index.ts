@@ -1,18 +1,21 @@
 import { resolve } from 'node:path'
 import { z } from 'zod'
+import { checkMail, mailSettings, mailVariables, type MailSettings } from './mail-settings'
 
-const environment = z.object({
-  DATABASE_URL: z.string().min(1),
-  /** The folder for everything the product keeps outside the database. */
-  COUNTERTHROW_DATA: z.string().default('.data'),
-  PORT: z.coerce.number().int().min(1).max(65535).default(3000),
-  /** The address people use: in mails and links, and for the origin check. */
-  COUNTERTHROW_ORIGIN: z.url({ protocol: /^https?$/ }).optional(),
-  /** How many proxies stand in front and add to X-Forwarded-For; without any, nothing it says is believed. */
-  COUNTERTHROW_PROXIES: z.coerce.number().int().min(0).max(10).default(0),
-  MAIL: z.enum(['local']).default('local'),
-  RATE_LIMIT: z.enum(['on', 'off']).default('on'),
-})
+const environment = z
+  .object({
+    DATABASE_URL: z.string().min(1),
+    /** The folder for everything the product keeps outside the database. */
+    COUNTERTHROW_DATA: z.string().default('.data'),
+    PORT: z.coerce.number().int().min(1).max(65535).default(3000),
+    /** The address people use: in mails and links, and for the origin check. */
+    COUNTERTHROW_ORIGIN: z.url({ protocol: /^https?$/ }).optional(),
+    /** How many proxies stand in front and add to X-Forwarded-For; without any, nothing it says is believed. */
+    COUNTERTHROW_PROXIES: z.coerce.number().int().min(0).max(10).default(0),
+    ...mailVariables,
+    RATE_LIMIT: z.enum(['on', 'off']).default('on'),
+  })
+  .superRefine(checkMail)
 
 export interface Config {
   databaseUrl: string
@@ -22,7 +25,7 @@ export interface Config {
   /** Reached by this machine alone: then outgoing mail may be read on a page. */
   loopback: boolean
   proxies: number
-  mail: 'local'
+  mail: MailSettings
   rateLimits: boolean
 }
 
@@ -43,7 +46,7 @@ export function readConfig(env: Record<string, string | undefined>): Config {
     secure: address.protocol === 'https:',
     loopback,
     proxies: settings.COUNTERTHROW_PROXIES,
-    mail: settings.MAIL,
+    mail: mailSettings(settings),
     rateLimits: settings.RATE_LIMIT === 'on' || !loopback,
   }
 }

@@ -29,7 +29,7 @@ export default defineConfig({
     ...(process.env.BENCH ? ['bench/**/*.spec.ts'] : []),
   ],
   outputDir: `${root}test-results`,
-  workers: 1,
+  workers: 2,
   retries: 0,
   forbidOnly: true,
   timeout: 60_000,

@@ -6,7 +6,16 @@ const kernel = [...numbers, 'mechanics']
 const pureRooms = [...kernel, 'model', 'frame']
 
 /** Rooms that run unchanged in a page, a worker and a server: no page, no built-ins, no clock, no chance. */
-export const pure = ['lib/units', 'lib/numerics', 'lib/mechanics', 'lib/sheet', 'scene/model', 'scene/frame']
+export const pure = [
+  'lib/units',
+  'lib/numerics',
+  'lib/mechanics',
+  'lib/sheet',
+  'lib/letters',
+  'lib/review',
+  'scene/model',
+  'scene/frame',
+]
 
 const react = ['react', 'react-dom']
 const three = ['three', '@react-three/fiber', '@react-three/drei']
@@ -27,6 +36,9 @@ export const rooms = {
     rooms: [...pureRooms, 'sheet'],
     packages: ['pdfkit', '@gltf-transform/core'],
   },
+
+  // pictures of scenes as PNG, drawn with the canvas renderer's own raster
+  pictures: { folder: 'lib/pictures', rooms: [...pureRooms, 'canvas', 'stage'], packages: ['sharp'] },
 
   canvas: { folder: 'scene/canvas', rooms: ['frame'], packages: [] },
   webgl: { folder: 'scene/webgl', rooms: ['frame'], packages: [...react, ...three] },
@@ -60,6 +72,7 @@ export const rooms = {
       ...pureRooms,
       'tables',
       'sheet',
+      'letters',
       'ui',
       'shell',
       'drawing',
@@ -67,6 +80,7 @@ export const rooms = {
       'stage',
       'session',
       'clock',
+      'review',
       'contracts',
       'errors',
       'access',
@@ -74,9 +88,15 @@ export const rooms = {
     packages: [...react, 'next', 'swr', 'zod', 'zustand'],
   },
 
+  // what may become of a version: its states, who moves it between them and what holds that up
+  review: { folder: 'lib/review', rooms: ['access'], packages: [] },
+
+  // what mails say, as text and HTML from one content
+  letters: { folder: 'lib/letters', rooms: [], packages: ['zod'] },
+
   contracts: {
     folder: 'lib/contracts',
-    rooms: [...pureRooms, 'sheet', 'access'],
+    rooms: [...pureRooms, 'sheet', 'letters', 'review', 'access'],
     packages: ['zod', 'zod-openapi'],
   },
   errors: { folder: 'lib/errors', rooms: [], packages: ['zod'] },
@@ -84,14 +104,14 @@ export const rooms = {
   migrations: { folder: 'drizzle', rooms: [] },
   database: {
     folder: 'db',
-    rooms: [...pureRooms, 'migrations', 'config', 'contracts', 'errors'],
-    packages: ['drizzle-orm', 'postgres', 'server-only', 'zod', '@node-rs/argon2'],
+    rooms: [...pureRooms, 'review', 'migrations', 'config', 'contracts', 'errors'],
+    packages: ['drizzle-orm', 'graphile-worker', 'postgres', 'server-only', 'zod', '@node-rs/argon2'],
     node: true,
   },
   adapters: {
     folder: 'lib/adapters',
     rooms: ['config', 'errors'],
-    packages: ['server-only', 'zod'],
+    packages: ['server-only', 'zod', 'nodemailer', 'resend'],
     node: true,
   },
   auth: {
@@ -109,6 +129,19 @@ export const rooms = {
     ],
     node: true,
   },
+  // what is done in the background: jobs put in by services, carried out by workers
+  queue: {
+    folder: 'lib/queue',
+    rooms: ['database'],
+    packages: ['drizzle-orm', 'graphile-worker', 'server-only', 'zod'],
+    node: true,
+  },
+  tasks: {
+    folder: 'lib/tasks',
+    rooms: ['queue', 'services', 'database', 'config'],
+    packages: ['graphile-worker', 'server-only', 'zod'],
+    node: true,
+  },
   services: {
     folder: 'lib/services',
     rooms: [
@@ -116,7 +149,11 @@ export const rooms = {
       'tables',
       'sheet',
       'export',
+      'pictures',
+      'letters',
+      'review',
       'database',
+      'queue',
       'adapters',
       'auth',
       'config',
@@ -141,6 +178,8 @@ export const rooms = {
         'tables',
         'sheet',
         'export',
+        'pictures',
+        'letters',
         'ui',
         'shell',
         'drawing',
@@ -151,7 +190,7 @@ export const rooms = {
         'stage',
         'canvas',
       ],
-      ...['contracts', 'errors', 'config', 'auth', 'services', 'http', 'adapters'],
+      ...['review', 'contracts', 'errors', 'config', 'auth', 'services', 'http', 'adapters'],
     ],
     packages: [...react, 'next', 'server-only', 'swr', 'zod', 'zod-openapi'],
     node: true,
@@ -164,6 +203,8 @@ export const doors = {
   access: { file: 'lib/auth/access.ts', room: 'auth' },
   clock: { file: 'scene/session/clock.ts', room: 'session' },
   health: { file: 'app/api/v1/health/route.ts', room: 'app', rooms: ['database'] },
+  // puts the worker and its services into one file
+  bundle: { file: 'db/server/bundle.mjs', room: 'database', packages: ['vite'] },
   // reads the services, which are TypeScript, before any build is there
   seed: { file: 'db/seed.mjs', room: 'database', packages: ['vite'] },
 }

@@ -13,6 +13,8 @@ const project = (name: string, more: object = {}) => ({
 const shared = { isolate: false }
 /** What measures the heap wants a process to itself. */
 const alone = 'tests/unit/**/*.alone.test.ts'
+/** What starts and kills whole servers wants a machine to itself. */
+const servers = 'tests/integration/server/**/*.test.ts'
 
 export default defineConfig({
   root,
@@ -34,7 +36,8 @@ export default defineConfig({
       project('bench', { include: [], benchmark: { include: ['tests/bench/**/*.bench.ts'] } }),
       project('golden', shared),
       project('rendering', shared),
-      project('integration', { globalSetup: `${support}cluster.mjs` }),
+      project('integration', { exclude: [servers], globalSetup: `${support}cluster.mjs` }),
+      project('servers', { include: [servers], globalSetup: `${support}cluster.mjs` }),
     ],
   },
 })

@@ -26,8 +26,8 @@ export async function startTestCluster() {
   await sweep()
   const dataFolder = mkdtempSync(join(tmpdir(), `${prefix}${process.pid}-`))
   const cluster = await startCluster({ dataFolder, throwaway: true })
-  await ask(cluster.keeperUrl, `create database ${template} owner app`)
-  await migrate(databaseAt(cluster.url, template))
+  await ask(cluster.keeperUrl, `create database ${template}`)
+  await migrate(databaseAt(cluster.url, template), databaseAt(cluster.keeperUrl, template))
   return {
     ...cluster,
     dataFolder,

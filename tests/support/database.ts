@@ -9,8 +9,10 @@ declare module 'vitest' {
 }
 
 export interface FreshDatabase {
-  /** Signs in as the role that the program has: it owns the database and nothing more. */
+  /** Signs in as the role that the program has: it reads and writes rows and owns nothing. */
   url: string
+  /** Signs in as the role that owns everything and alone migrates. */
+  ownerUrl: string
   drop(): Promise<void>
 }
 
@@ -27,8 +29,11 @@ async function asKeeper(statement: string) {
 export async function freshDatabase(): Promise<FreshDatabase> {
   const { url, template } = inject('cluster')
   const name = `t_${randomUUID().replaceAll('-', '')}`
-  await asKeeper(`create database ${name} template ${template} owner app`)
-  const own = new URL(url)
-  own.pathname = `/${name}`
-  return { url: own.href, drop: () => asKeeper(`drop database if exists ${name} with (force)`) }
+  await asKeeper(`create database ${name} template ${template}`)
+  const at = (address: string) => Object.assign(new URL(address), { pathname: `/${name}` }).href
+  return {
+    url: at(url),
+    ownerUrl: at(inject('cluster').keeperUrl),
+    drop: () => asKeeper(`drop database if exists ${name} with (force)`),
+  }
 }

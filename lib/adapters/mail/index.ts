@@ -1,7 +1,13 @@
-import { config, type Config } from '@/lib/config'
+import { config } from '@/lib/config'
 import { localMailer } from './local'
 import type { Mailer } from './port'
+import { resendMailer } from './resend'
+import { smtpMailer } from './smtp'
 
-const mailers: Record<Config['mail'], Mailer> = { local: localMailer }
-
-export const mailer = (): Mailer => mailers[config().mail]
+/** The way that MAIL chooses. */
+export function mailer(): Mailer {
+  const { mail } = config()
+  if (mail.by === 'smtp') return smtpMailer(mail)
+  if (mail.by === 'resend') return resendMailer(mail)
+  return localMailer
+}

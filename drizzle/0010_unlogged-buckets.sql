@@ -1,0 +1,1 @@
+ALTER TABLE "rate_buckets" SET UNLOGGED;

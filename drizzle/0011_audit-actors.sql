@@ -1,0 +1,1 @@
+CREATE INDEX "audit_log_actor" ON "audit_log" USING btree ("workshop_id","actor_id","id");
