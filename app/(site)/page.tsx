@@ -1,5 +1,6 @@
 import Link from 'next/link'
 import { signOutAction } from '@/app/actions'
+import { sheetPerson } from '@/app/sheet-person'
 import { LiveScene } from '@/components/drawing/live-scene'
 import { Sheet } from '@/components/shell/sheet'
 import { TitleActions, TitleBlock, TitleCell } from '@/components/shell/title-block'
@@ -28,7 +29,7 @@ export default async function HomePage() {
     <Sheet
       current="none"
       className="home"
-      person={person && { name: person.name, workshop: person.memberships[0].workshopName }}
+      person={person && sheetPerson(person)}
       signOut={signOutAction}
     >
       <section className="stage" aria-label="Drawing">

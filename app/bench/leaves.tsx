@@ -26,6 +26,12 @@ const leaves: BenchProps['leaves'] = {
   paper: leaf('Paper', () => import('@/components/paper/paper-leaf').then((it) => it.PaperLeaf)),
 }
 
-export const BenchWithLeaves = (props: Omit<BenchProps, 'notes' | 'leaves'>) => (
-  <BenchLoader {...props} notes={<MarginNotes />} leaves={leaves} />
+const Share = dynamic(() => import('@/components/sharing/share-dialog').then((it) => it.ShareDialog), {
+  ssr: false,
+})
+
+const Standing = dynamic(() => import('./standing').then((it) => it.Standing), { ssr: false })
+
+export const BenchWithLeaves = (props: Omit<BenchProps, 'notes' | 'leaves' | 'Share' | 'Standing'>) => (
+  <BenchLoader {...props} notes={<MarginNotes />} leaves={leaves} Share={Share} Standing={Standing} />
 )

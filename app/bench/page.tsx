@@ -1,11 +1,11 @@
 import type { Metadata } from 'next'
-import { notFound, redirect } from 'next/navigation'
+import { redirect } from 'next/navigation'
 import { signOutAction } from '@/app/actions'
+import { sceneOf } from '@/app/scene-of'
+import { sheetPerson } from '@/app/sheet-person'
 import { Sheet } from '@/components/shell/sheet'
-import { operationsOf, type Person } from '@/lib/auth/access'
+import { operationsOf, presentMembership } from '@/lib/auth/access'
 import { currentPerson } from '@/lib/auth/current-person'
-import { Problem } from '@/lib/errors/problem'
-import { openScene } from '@/lib/services/open-scene'
 import { readDraft } from '@/lib/services/read-draft'
 import { BenchWithLeaves } from './leaves'
 
@@ -21,10 +21,11 @@ export default async function BenchPage({ searchParams }: Props) {
   const one = (name: string) => (typeof asked[name] === 'string' ? asked[name] : null)
   const sceneId = one('scene')
   if (sceneId && !person) redirect(`/sign-in?next=${encodeURIComponent(`/bench?scene=${sceneId}`)}`)
-  const opened = person && sceneId ? await sceneOf(person, sceneId) : null
+  const number = /^[1-9]\d{0,8}$/.test(one('version') ?? '') ? Number(one('version')) : undefined
+  const opened = person && sceneId ? await sceneOf(person, sceneId, number) : null
   const membership = person
     ? (person.memberships.find(({ workshopId }) => workshopId === opened?.scene.workshopId) ??
-      person.memberships[0])
+      presentMembership(person))
     : null
   const may = membership ? operationsOf(membership.role) : []
   const draft = person && may.includes('draft.keep') ? await readDraft(person, sceneId) : null
@@ -32,7 +33,7 @@ export default async function BenchPage({ searchParams }: Props) {
     <Sheet
       current="bench"
       className="bench"
-      person={person && membership && { name: person.name, workshop: membership.workshopName }}
+      person={person && sheetPerson(person, membership?.workshopId)}
       signOut={signOutAction}
     >
       <BenchWithLeaves
@@ -49,23 +50,15 @@ export default async function BenchPage({ searchParams }: Props) {
           opened && {
             sceneId: opened.scene.id,
             version: opened.version.number,
+            head: opened.scene.headVersion,
             document: opened.version.document,
           }
         }
+        asked={number !== undefined}
         draft={draft}
         preset={one('preset')}
         fresh={asked.new !== undefined}
       />
     </Sheet>
   )
-}
-
-/** A scene that is not there and one that is somebody else's look alike. */
-async function sceneOf(person: Person, id: string) {
-  try {
-    return await openScene(person, id)
-  } catch (error) {
-    if (error instanceof Problem && (error.kind === 'not-found' || error.kind === 'not-allowed')) notFound()
-    throw error
-  }
 }

@@ -15,6 +15,8 @@ export interface AccountField {
 
 interface Props {
   title: string
+  /** Over the fields, of which there may be none. */
+  words?: ReactNode
   fields: AccountField[]
   submit: string
   /** Two cells of the title block: other ways on. */
@@ -25,7 +27,7 @@ interface Props {
 }
 
 /** One form for signing in, signing up and passwords: the typed text stays, and what is wrong stands beside it. */
-export function AccountForm({ title, fields, submit, ways, aside, send }: Props) {
+export function AccountForm({ title, words, fields, submit, ways, aside, send }: Props) {
   const id = useId()
   const [refusal, setRefusal] = useState<Refusal | null>(null)
   const [sending, setSending] = useState(false)
@@ -35,7 +37,9 @@ export function AccountForm({ title, fields, submit, ways, aside, send }: Props)
     () => true,
     () => false,
   )
-  const issueOf = (name: string) => refusal?.problem.issues?.find((issue) => issue.path === name)
+  // a field may be sent as part of something, such as account.password
+  const isOf = (path: string, name: string) => path === name || path.endsWith(`.${name}`)
+  const issueOf = (name: string) => refusal?.problem.issues?.find(({ path }) => isOf(path, name))
   const general = refusal && !fields.some((field) => issueOf(field.name))
 
   async function onSubmit(event: FormEvent<HTMLFormElement>) {
@@ -48,8 +52,8 @@ export function AccountForm({ title, fields, submit, ways, aside, send }: Props)
     } catch (error) {
       if (!(error instanceof Refusal)) throw error
       setRefusal(error)
-      const wrong = fields.find((field) => error.problem.issues?.some((issue) => issue.path === field.name))
-      form.querySelector<HTMLInputElement>(`[name="${(wrong ?? fields[0]).name}"]`)?.focus()
+      const wrong = fields.find((field) => error.problem.issues?.some(({ path }) => isOf(path, field.name)))
+      form.querySelector<HTMLInputElement>(`[name="${(wrong ?? fields[0])?.name}"]`)?.focus()
     } finally {
       setSending(false)
     }
@@ -62,6 +66,7 @@ export function AccountForm({ title, fields, submit, ways, aside, send }: Props)
         <h2 className="v title">Counterthrow</h2>
       </div>
       <div className="c6 first in2">
+        {words}
         {fields.map((field) => (
           <Field key={field.name} field={field} id={`${id}-${field.name}`} issue={issueOf(field.name)} />
         ))}

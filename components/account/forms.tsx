@@ -2,7 +2,9 @@
 
 import Link from 'next/link'
 import { useState } from 'react'
+import { goTo } from '@/components/ui/go-to'
 import { call } from '@/lib/contracts/call'
+import { ownPage } from '@/lib/contracts/own-page'
 import type * as people from '@/lib/contracts/people'
 import { AccountForm, type AccountField } from './account-form'
 
@@ -13,18 +15,12 @@ const password: AccountField = {
   type: 'password',
   autoComplete: 'current-password',
 }
-const newPassword: AccountField = {
+export const newPassword: AccountField = {
   ...password,
   autoComplete: 'new-password',
   hint: 'At least 10 characters. A few unrelated words make a good one.',
   minLength: 10,
 }
-
-/** The whole page is loaded again, so that every part of it knows the person. */
-const goTo = (address: string) => window.location.assign(address)
-
-/** Back to where somebody came from, if that is one of our own pages. */
-const onward = (next: string | undefined) => (next && /^\/(?![/\\])/.test(next) ? next : '/scenes')
 
 const way = (k: string, href: string, label: string, first = false) => (
   <div className={first ? 'c3 first' : 'c3'}>
@@ -57,7 +53,7 @@ export function SignInForm({ next }: { next?: string }) {
           path: '/api/v1/auth/sign-in',
           body: { email, password },
         })
-        goTo(onward(next))
+        goTo(ownPage(next, '/scenes'))
       }}
     />
   )
@@ -93,7 +89,7 @@ export function SignUpForm({ next }: { next?: string }) {
           path: '/api/v1/auth/sign-up',
           body: { name, email, password, ...(workshopName.trim() && { workshopName }) },
         })
-        goTo(onward(next))
+        goTo(ownPage(next, '/scenes'))
       }}
     />
   )

@@ -1,16 +1,18 @@
-import type { System } from '@/lib/units/quantities'
 import { newScene } from '@/scene/model/default-scene'
 import { presetById } from '@/scene/model/presets'
 import type { Scene } from '@/scene/model/scene'
 import { createClock } from '@/scene/session/clock'
 import { readKept } from '@/scene/session/draft'
+import { keepUnits, readUnits } from '@/scene/session/kept-units'
 import type { BenchTools } from '@/scene/session/react'
 import { createSession, type Base, type Saved } from '@/scene/session/session'
 
 /** Where the bench begins, as its address and the server say. */
 export interface BenchStart {
   /** A stored scene that was asked for. */
-  opened: { sceneId: string; version: number; document: Scene } | null
+  opened: { sceneId: string; version: number; head: number; document: Scene } | null
+  /** That version was asked for by its number: it lies on top of work that was left. */
+  asked?: boolean
   /** The person's own unsaved work on it (or on nothing yet), as the server has it. */
   draft: { document: Scene; base: number | null; updatedAt: string } | null
   preset: string | null
@@ -18,11 +20,10 @@ export interface BenchStart {
 }
 
 const FIRST = 'v8x-5000'
-const UNITS = 'counterthrow.units'
 
 /** The session and clock of one visit: work that was left is taken up; a preset asked for is laid on top of it. */
-export function begin({ opened, draft, preset, fresh }: BenchStart): BenchTools {
-  const system: System = localStorage.getItem(UNITS) === 'us' ? 'us' : 'si'
+export function begin({ opened, asked, draft, preset, fresh }: BenchStart): BenchTools {
+  const system = readUnits(localStorage)
   const saved: Saved | null = opened && {
     sceneId: opened.sceneId,
     version: opened.version,
@@ -44,8 +45,10 @@ export function begin({ opened, draft, preset, fresh }: BenchStart): BenchTools 
   const wanted = preset ? presetById(preset) : fresh ? presetById(FIRST) : undefined
   if (wanted) session.open(newScene(wanted.train), 'preset')
 
+  if (asked && saved && session.getState().scene !== saved.scene) session.open(saved.scene, 'version', saved)
+
   session.subscribe((state, before) => {
-    if (state.system !== before.system) localStorage.setItem(UNITS, state.system)
+    if (state.system !== before.system) keepUnits(localStorage, state.system)
   })
   const clock = createClock()
   return { session, clock }

@@ -6,6 +6,7 @@ import { LeafContext } from '@/components/figures/leaf'
 import { Slips, useSlip } from '@/components/ui/slips'
 import { StampContext } from '@/components/ui/stamp'
 import { panelId, TabList } from '@/components/ui/tabs'
+import type { Operation } from '@/lib/auth/access'
 import { call } from '@/lib/contracts/call'
 import type { keepDraft as keepDraftOperation, keepSceneDraft } from '@/lib/contracts/drafts'
 import { newScene } from '@/scene/model/default-scene'
@@ -19,28 +20,48 @@ import { stampOf } from '@/scene/session/stamp'
 import { begin, setClock, type BenchStart } from './begin'
 import { Drive } from './drive'
 import { FiringStrip } from './firing-strip'
+import { MergeDialog } from './merge-dialog'
 import { PartsList } from './parts-list'
 import type { BenchPerson } from './person'
 import { PresetsDialog } from './presets-dialog'
-import { ConflictDialog, SaveDialog, SignInDialog } from './save-dialog'
+import { SaveDialog, SignInDialog } from './save-dialog'
 import { SetOutDialog } from './set-out-dialog'
-import { ShareDialog } from './share-dialog'
 import { StagePanel } from './stage-panel'
 import { BenchTitle } from './title'
 import { useTicking } from './use-clock'
 import { useFiles } from './use-files'
-import { useSaving } from './use-saving'
+import { useSaving, type Instead } from './use-saving'
+
+interface ShareProps {
+  sceneId: string
+  version: number
+  title: string
+  changed: boolean
+  may: readonly Operation[]
+  onClose(): void
+}
+
+interface StandingProps {
+  sceneId: string
+  version: number
+  changed: boolean
+  may: readonly Operation[]
+}
 
 export interface BenchProps extends BenchStart {
   person: BenchPerson | null
   /** The margin notes, a feature of their own. */
   notes: ReactNode
+  /** Links to the saved scene, a feature too. */
+  Share: ComponentType<ShareProps>
+  /** How the saved version stands with those who judge it. */
+  Standing: ComponentType<StandingProps>
   /** The pages beside the drawing, features too. */
   leaves: Record<string, { title: string; Content: ComponentType }>
 }
 
 /** The page where a crank train is described and run. */
-export function Bench({ person, notes, leaves, ...start }: BenchProps) {
+export function Bench({ person, notes, leaves, Share, Standing, ...start }: BenchProps) {
   const [tools] = useState(() => begin(start))
   const [compute] = useState(createResults)
   const [stamp] = useState(() => () => stampOf(tools.session.getState(), new Date()))
@@ -56,7 +77,7 @@ export function Bench({ person, notes, leaves, ...start }: BenchProps) {
       <ResultsContext value={results}>
         <Slips>
           <StampContext value={stamp}>
-            <Sections person={person} notes={notes} leaves={leaves} />
+            <Sections {...{ person, notes, leaves, Share, Standing }} latest={start.opened} />
           </StampContext>
         </Slips>
       </ResultsContext>
@@ -66,7 +87,17 @@ export function Bench({ person, notes, leaves, ...start }: BenchProps) {
 
 type Open = 'presets' | 'set-out' | 'save' | 'share' | 'sign-in-save' | 'sign-in-share' | null
 
-function Sections({ person, notes, leaves }: Pick<BenchProps, 'person' | 'notes' | 'leaves'>) {
+function Sections({
+  person,
+  notes,
+  leaves,
+  Share,
+  Standing,
+  latest,
+}: Pick<BenchProps, 'person' | 'notes' | 'leaves' | 'Share' | 'Standing'> & {
+  /** The latest version of the scene that was opened, as it was then. */
+  latest: { sceneId: string; head: number } | null
+}) {
   const { session } = useBench()
   const slip = useSlip()
   const [open, setOpen] = useState<Open>(null)
@@ -80,6 +111,7 @@ function Sections({ person, notes, leaves }: Pick<BenchProps, 'person' | 'notes'
   const files = useFiles()
   const keptAt = useDraft(person)
   const close = () => setOpen(null)
+  const head = saved ? Math.max(saved.version, latest?.sceneId === saved.sceneId ? latest.head : 0) : 0
   useUndoKeys()
   const sceneId = saved?.sceneId
   const [leaf, setLeaf] = useLeaf(leaves)
@@ -101,8 +133,8 @@ function Sections({ person, notes, leaves }: Pick<BenchProps, 'person' | 'notes'
       setOpen('save')
     }
   }
-  const save = async (message: string, onTopOf?: number) => {
-    if (!(await saving.save(message, onTopOf))) return
+  const save = async (message: string, instead?: Instead) => {
+    if (!(await saving.save(message, instead))) return
     close()
     slip({ text: `Version ${session.getState().saved!.version} saved.` })
   }
@@ -150,7 +182,13 @@ function Sections({ person, notes, leaves }: Pick<BenchProps, 'person' | 'notes'
         person={person}
         drawn={drawn}
         keptAt={keptAt}
+        head={head}
         busy={saving.busy}
+        standing={
+          saved && person ? (
+            <Standing sceneId={saved.sceneId} version={saved.version} changed={changed} may={person.may} />
+          ) : null
+        }
         onSave={onSave}
         onShare={onShare}
       />
@@ -176,7 +214,7 @@ function Sections({ person, notes, leaves }: Pick<BenchProps, 'person' | 'notes'
       {open === 'sign-in-share' ? <SignInDialog to="share" onClose={close} /> : null}
       {open === 'save' && !saving.conflict ? (
         <SaveDialog
-          version={saved ? saved.version + 1 : 1}
+          version={head + 1}
           title={title}
           busy={saving.busy}
           problem={saving.problem}
@@ -188,10 +226,13 @@ function Sections({ person, notes, leaves }: Pick<BenchProps, 'person' | 'notes'
         />
       ) : null}
       {saving.conflict ? (
-        <ConflictDialog
+        <MergeDialog
+          // another save in between is another choice
+          key={saving.conflict.head.number}
           conflict={saving.conflict}
           busy={saving.busy}
-          onMine={() => save(saving.conflict!.yours.message, saving.conflict!.head.number)}
+          problem={saving.problem}
+          onSave={save}
           onTheirs={() => {
             saving.takeTheirs()
             close()
@@ -203,7 +244,13 @@ function Sections({ person, notes, leaves }: Pick<BenchProps, 'person' | 'notes'
         />
       ) : null}
       {open === 'share' && saved ? (
-        <ShareDialog saved={saved} changed={changed} title={title} onClose={close} />
+        <Share
+          {...{ title, changed }}
+          sceneId={saved.sceneId}
+          version={saved.version}
+          may={person?.may ?? []}
+          onClose={close}
+        />
       ) : null}
       {files.dialog}
     </LeafContext>

@@ -9,7 +9,8 @@ import { formatNumber } from '@/lib/units/format'
 import { useBench, useSessionState } from '@/scene/session/react'
 import { fields } from './fields'
 import { RefusedNote } from '@/components/figures/refused-note'
-import { usePlaying, useReducedMotion } from './use-clock'
+import { useReducedMotion } from '@/components/drawing/use-reduced-motion'
+import { usePlaying } from './use-clock'
 
 const SLOWEST = 2000
 const slownesses = [1, 2, 5, 10, 20, 50, 100, 200, 500, 1000, 2000]

@@ -3,7 +3,6 @@
 import Link from 'next/link'
 import { useId, useState } from 'react'
 import { Dialog } from '@/components/ui/dialog'
-import type { SaveConflict } from '@/lib/contracts/scenes'
 
 export function SignInDialog({ to, onClose }: { to: 'save' | 'share'; onClose(): void }) {
   return (
@@ -84,45 +83,6 @@ export function SaveDialog({ version, title, busy, problem, onClose, onSave }: S
       </form>
       <p className="cap">
         A version is never changed afterwards. It opens at this crank angle, view, speed and overlays.
-      </p>
-    </Dialog>
-  )
-}
-
-interface ConflictProps {
-  conflict: SaveConflict
-  busy: boolean
-  onMine(): void
-  onTheirs(): void
-  onClose(): void
-}
-
-/** Somebody saved in between: both are there, and one of three things is done. */
-export function ConflictDialog({ conflict, busy, onMine, onTheirs, onClose }: ConflictProps) {
-  const { head, base } = conflict
-  return (
-    <Dialog
-      title={`Version ${head.number} was saved in between`}
-      about={{ k: 'By', v: `${head.author}, ${new Date(head.createdAt).toLocaleString()}` }}
-      onClose={onClose}
-      actions={
-        <>
-          <button type="button" className="btn" onClick={onClose}>
-            Keep mine as a draft
-          </button>
-          <button type="button" className="btn" onClick={onTheirs}>
-            Open version {head.number}
-          </button>
-          <button type="button" className="btn pri" disabled={busy} onClick={onMine}>
-            Save mine as version {head.number + 1}
-          </button>
-        </>
-      }
-    >
-      <p>
-        Yours was made from version {base.number}.{' '}
-        {head.message ? `Version ${head.number} says: “${head.message}”. ` : ''}
-        Nothing is lost, whichever you choose.
       </p>
     </Dialog>
   )

@@ -2,6 +2,7 @@
 
 import dynamic from 'next/dynamic'
 import { useEffect, useMemo, useRef, useState } from 'react'
+import { viewOptions } from '@/components/drawing/view-names'
 import { onThemeChange } from '@/components/shell/theme'
 import { Segmented } from '@/components/ui/segmented'
 import { formatNumber } from '@/lib/units/format'
@@ -13,7 +14,7 @@ import { LiveWords } from './live-words'
 import { focusRow } from './parts-list'
 import { PickedPart } from './picked-part'
 import { ShowPanel } from './show-panel'
-import { useReducedMotion } from './use-clock'
+import { useReducedMotion } from '@/components/drawing/use-reduced-motion'
 
 // The drawing needs a browser: it is fetched once the page stands.
 const StageView = dynamic(
@@ -23,15 +24,6 @@ const StageView = dynamic(
     loading: () => <p className="setting-out">Setting out the drawing</p>,
   },
 )
-
-const views: { value: NamedView; label: string }[] = [
-  { value: 'free', label: 'Free' },
-  { value: 'end', label: 'End' },
-  { value: 'drive', label: 'Drive end' },
-  { value: 'side', label: 'Side' },
-  { value: 'bank', label: 'Bank' },
-  { value: 'top', label: 'Top' },
-]
 
 /** From this width on, end and side view stand beside the free one. */
 const ROOM_FOR_PANES = 980
@@ -98,7 +90,7 @@ export function StagePanel({ id, onRenderer }: Props) {
         <Segmented
           label="Named views"
           value={name}
-          options={views}
+          options={viewOptions}
           onChange={(next) => {
             setName(next)
             main.current?.view(next)

@@ -1,6 +1,7 @@
 'use client'
 
-import { useId, useRef, useState } from 'react'
+import Link from 'next/link'
+import { useId, useRef, useState, type ReactNode } from 'react'
 import { TitleActions, TitleBlock, TitleCell } from '@/components/shell/title-block'
 import { useBench, useSessionState } from '@/scene/session/react'
 import { sameTrain } from '@/scene/session/same-train'
@@ -12,13 +13,17 @@ interface Props {
   /** What draws, and in a sentence why. */
   drawn: { words: string; reason: string }
   keptAt: string | null
+  /** The latest version of the scene; 0 where nothing is saved. */
+  head: number
   busy: boolean
+  /** How the saved version stands with those who judge it. */
+  standing: ReactNode
   onSave(): void
   onShare(): void
 }
 
 /** What this sheet is, and its main actions. */
-export function BenchTitle({ person, drawn, keptAt, busy, onSave, onShare }: Props) {
+export function BenchTitle({ person, drawn, keptAt, head, busy, standing, onSave, onShare }: Props) {
   const { session } = useBench()
   const title = useSessionState((state) => state.scene.train.title)
   const saved = useSessionState((state) => state.saved)
@@ -26,7 +31,7 @@ export function BenchTitle({ person, drawn, keptAt, busy, onSave, onShare }: Pro
     ({ saved: of, scene }) => of !== null && !sameTrain(of.scene.train, scene.train),
   )
   const refused = useSessionState((state) => Object.keys(state.refused).length)
-  const next = saved ? saved.version + 1 : 1
+  const next = head + 1
   const mayWrite = !person || person.may.includes(saved ? 'scene.save' : 'scene.create')
   return (
     <TitleBlock>
@@ -40,7 +45,14 @@ export function BenchTitle({ person, drawn, keptAt, busy, onSave, onShare }: Pro
       </div>
       <TitleCell k="Version" span={2} first>
         <span className="v">
-          {saved ? `${saved.version}${changed ? ', with changes' : ''}` : 'not saved yet'}
+          {saved ? (
+            <Link href={`/scenes/${saved.sceneId}/versions`} prefetch={false} title="All versions">
+              {saved.version}
+              {changed ? ', with changes' : ''}
+            </Link>
+          ) : (
+            'not saved yet'
+          )}
         </span>
       </TitleCell>
       <TitleCell k="Drawn" span={2}>
@@ -57,18 +69,23 @@ export function BenchTitle({ person, drawn, keptAt, busy, onSave, onShare }: Pro
       <TitleCell k="Drawn by" span={3}>
         <span className="v">{person?.name ?? 'you'}</span>
       </TitleCell>
+      {standing}
       <TitleActions
         note={
           refused > 0
             ? `${refused} value${refused > 1 ? 's' : ''} not taken`
-            : keptAt
-              ? `Draft kept ${keptAt}`
-              : 'Draft not kept yet'
+            : saved && saved.version < head
+              ? `Version ${saved.version} of ${head} is open: saving makes version ${next}`
+              : keptAt
+                ? `Draft kept ${keptAt}`
+                : 'Draft not kept yet'
         }
       >
-        <button type="button" className="btn" disabled={busy} onClick={onShare}>
-          Share…
-        </button>
+        {!person || person.may.includes('link.create') ? (
+          <button type="button" className="btn" disabled={busy} onClick={onShare}>
+            Share…
+          </button>
+        ) : null}
         <button
           type="button"
           className="btn pri"

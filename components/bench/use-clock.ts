@@ -26,17 +26,3 @@ export function usePlaying(): boolean {
     () => false,
   )
 }
-
-export function useReducedMotion(): boolean {
-  return useSyncExternalStore(
-    (changed) => {
-      const query = window.matchMedia(REDUCED)
-      query.addEventListener('change', changed)
-      return () => query.removeEventListener('change', changed)
-    },
-    () => window.matchMedia(REDUCED).matches,
-    () => false,
-  )
-}
-
-const REDUCED = '(prefers-reduced-motion: reduce)'

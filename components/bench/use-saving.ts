@@ -4,6 +4,7 @@ import { useState } from 'react'
 import { call, Refusal } from '@/lib/contracts/call'
 import type { dropDraft, dropSceneDraft } from '@/lib/contracts/drafts'
 import type { createScene, SaveConflict, saveVersion } from '@/lib/contracts/scenes'
+import type { Scene } from '@/scene/model/scene'
 import { dropKept, snapshot } from '@/scene/session/draft'
 import { useBench } from '@/scene/session/react'
 import type { BenchPerson } from './person'
@@ -13,12 +14,19 @@ const key = () =>
     '',
   )
 
+/** What is saved where somebody else saved in between. */
+export interface Instead {
+  document: Scene
+  /** The version it comes on top of; null for a scene of its own. */
+  onTopOf: number | null
+}
+
 export interface Saving {
   busy: boolean
   problem: string | null
   conflict: SaveConflict | null
-  /** True once a version stands. */
-  save(message: string, onTopOf?: number): Promise<boolean>
+  /** True once a version stands: of the scene on the bench, or of another document in its place. */
+  save(message: string, instead?: Instead): Promise<boolean>
   takeTheirs(): void
   forget(): void
 }
@@ -32,9 +40,10 @@ export function useSaving(person: BenchPerson | null): Saving {
   // The same attempt sent twice is carried out once.
   const [attempt, setAttempt] = useState(key)
 
-  const save = async (message: string, onTopOf?: number): Promise<boolean> => {
-    const { saved } = session.getState()
-    const document = snapshot(session, clock)
+  const save = async (message: string, instead?: Instead): Promise<boolean> => {
+    const { saved: open } = session.getState()
+    const document = instead?.document ?? snapshot(session, clock)
+    const saved = instead?.onTopOf === null ? null : open
     setBusy(true)
     setProblem(null)
     try {
@@ -43,7 +52,7 @@ export function useSaving(person: BenchPerson | null): Saving {
             method: 'POST',
             path: '/api/v1/scenes/{id}/versions',
             params: { id: saved.sceneId },
-            body: { base: onTopOf ?? saved.version, message, document },
+            body: { base: instead?.onTopOf ?? saved.version, message, document },
             key: attempt,
           })
         : await call<typeof createScene>({
@@ -53,11 +62,13 @@ export function useSaving(person: BenchPerson | null): Saving {
             key: attempt,
           })
       const { scene, version } = answer
-      session.markSaved({ sceneId: scene.id, version: version.number, scene: document })
-      dropKept(localStorage, saved ? saved.sceneId : null)
+      const stands = { sceneId: scene.id, version: version.number, scene: document }
+      if (instead) session.open(document, 'version', stands)
+      else session.markSaved(stands)
+      dropKept(localStorage, open ? open.sceneId : null)
       setConflict(null)
       setAttempt(key())
-      await forgetDraft(saved ? saved.sceneId : null)
+      await forgetDraft(open ? open.sceneId : null)
       return true
     } catch (error) {
       if (!(error instanceof Refusal)) throw error

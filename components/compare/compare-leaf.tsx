@@ -29,7 +29,7 @@ import { EngineChoice } from './engine-choice'
 import { firstRival, type Rival } from './engines'
 import { OwnSpeed } from './own-speed'
 import { useClocks } from './use-clocks'
-import { useSize } from './use-size'
+import { useSize } from '@/components/ui/use-size'
 
 /** Narrower than this there is room for one engine at a time. */
 const ROOM_FOR_TWO = 640

@@ -10,7 +10,7 @@ import type { Clock } from '@/scene/session/clock'
 import { arrowsClipped } from '@/scene/stage/arrows-clipped'
 import { cameraOfShot, newtonsPerCm, shotOfCamera, type Shot } from '@/scene/stage/shared-view'
 import type { Stage, StageLook, StageModel } from '@/scene/stage/types'
-import { useSize } from './use-size'
+import { useSize } from '@/components/ui/use-size'
 
 interface Props {
   number: number

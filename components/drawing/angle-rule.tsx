@@ -13,10 +13,15 @@ interface Props {
   events: { cylinder: number; angle: number }[]
   /** Where more than one stands on a page. */
   label?: string
+  /** Cylinder names: the events then stand by name over the rule, with room for flags between, and the angle is read elsewhere. */
+  names?: readonly string[]
 }
 
+/** Height of what stands over a rule with names. */
+const roomForFlags = 30
+
 /** A steel rule of one working cycle with the firing events on it; its cursor is the crank angle. */
-export function AngleRule({ clock, events, label = 'Crank angle' }: Props) {
+export function AngleRule({ clock, events, label = 'Crank angle', names }: Props) {
   const rule = useRef<SVGSVGElement>(null)
   const cursor = useRef<SVGGElement>(null)
   const flag = useRef<SVGTextElement>(null)
@@ -62,6 +67,7 @@ export function AngleRule({ clock, events, label = 'Crank angle' }: Props) {
     clock.setAngle(step === undefined ? 0 : clock.angle + step / degrees)
   }
 
+  const firingAt = names ? 12 - roomForFlags : 26
   const cycleDeg = Math.round(clock.cycle * degrees)
   const each = width < 420 ? 30 : 10
   const marks = Array.from({ length: cycleDeg / each + 1 }, (_, index) => index * each)
@@ -69,7 +75,11 @@ export function AngleRule({ clock, events, label = 'Crank angle' }: Props) {
     <svg
       ref={rule}
       className="dr angle-rule"
-      viewBox={`${-margin} 0 ${width + 2 * margin} 56`}
+      viewBox={
+        names
+          ? `${-margin} ${4 - roomForFlags} ${width + 2 * margin} ${52 + roomForFlags}`
+          : `${-margin} 0 ${width + 2 * margin} 56`
+      }
       role="slider"
       tabIndex={0}
       aria-label={label}
@@ -95,18 +105,26 @@ export function AngleRule({ clock, events, label = 'Crank angle' }: Props) {
             {mark === cycleDeg ? `${mark}°` : mark}
           </text>
         ))}
+      {names ? <path className="lane" d={`M0 ${firingAt}H${width}`} /> : null}
       {events.map((event) => (
-        <path
-          key={event.cylinder}
-          className="fire"
-          d={`M${x(event.angle)} 21.5l4.5 4.5 -4.5 4.5 -4.5 -4.5z`}
-        />
+        <g key={event.cylinder}>
+          <path className="fire" d={`M${x(event.angle)} ${firingAt - 4.5}l4.5 4.5 -4.5 4.5 -4.5 -4.5z`} />
+          {names ? (
+            <text className="t fig sm" x={x(event.angle) + 8} y={firingAt + 4}>
+              {names[event.cylinder]}
+            </text>
+          ) : null}
+        </g>
       ))}
       <g ref={cursor}>
         <path className="cursor" d="M0 16V34" />
         <path className="curtri" d="M0 34l-5 8h10z" />
-        <path className="cflag" d="M-25 0h50v16h-50z" />
-        <text ref={flag} className="t fig cft" x={0} y={12} textAnchor="middle" />
+        {names ? null : (
+          <>
+            <path className="cflag" d="M-25 0h50v16h-50z" />
+            <text ref={flag} className="t fig cft" x={0} y={12} textAnchor="middle" />
+          </>
+        )}
       </g>
     </svg>
   )

@@ -1,8 +1,9 @@
 'use client'
 
-import { lazy, Suspense, useEffect, useId, useRef, useState } from 'react'
+import { lazy, Suspense, useEffect, useId, useRef, useState, type ReactNode } from 'react'
 import type { Train } from '@/lib/mechanics/train'
 import type { Scene } from '@/scene/model/scene'
+import { MovingContext } from './moving-context'
 import type { MovingScene } from './start-scene'
 
 // Two steps: first what moves, and once it is seen to move everything else. The poster is there before any script.
@@ -16,9 +17,11 @@ export interface RunningSceneProps {
   label: string
   /** Words for those who see no picture. */
   description: string
+  /** What the page has besides, shown once the engine is seen; it may ask for the scene by `useMovingScene`. */
+  after?: ReactNode
 }
 
-export function RunningScene({ scene, train, poster, label, description }: RunningSceneProps) {
+export function RunningScene({ scene, train, poster, label, description, after }: RunningSceneProps) {
   const host = useRef<HTMLDivElement>(null)
   const words = useId()
   const [seen, setSeen] = useState<MovingScene | null>(null)
@@ -58,9 +61,12 @@ export function RunningScene({ scene, train, poster, label, description }: Runni
         {description}
       </p>
       {seen ? (
-        <Suspense>
-          <SceneDrive scene={scene} train={train} moving={seen} />
-        </Suspense>
+        <MovingContext value={seen}>
+          <Suspense>
+            <SceneDrive scene={scene} train={train} moving={seen} />
+          </Suspense>
+          {after}
+        </MovingContext>
       ) : null}
     </div>
   )

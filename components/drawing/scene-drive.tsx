@@ -1,14 +1,13 @@
 'use client'
 
-import { useEffect, useMemo, useSyncExternalStore } from 'react'
+import { useEffect, useMemo } from 'react'
 import { onThemeChange } from '@/components/shell/theme'
-import { Icon } from '@/components/ui/icon'
 import type { Train } from '@/lib/mechanics/train'
 import type { Scene } from '@/scene/model/scene'
 import { buildForces } from '@/scene/stage/build-forces'
 import { createDetails } from '@/scene/stage/create-details'
-import { stepClock } from './clock-moves'
 import { FiringStrip } from './firing-strip'
+import { PlayButtons } from './play-buttons'
 import type { MovingScene } from './start-scene'
 
 const rpm = (2 * Math.PI) / 60
@@ -23,7 +22,6 @@ interface Props {
 export default function SceneDrive({ scene: { train: document, view }, train, moving }: Props) {
   const { clock, stage, rig } = moving
   const forces = useMemo(() => buildForces(train, view.speedRpm * rpm), [train, view.speedRpm])
-  const playing = useSyncExternalStore(clock.subscribe, () => clock.playing)
   useEffect(() => {
     stage.enrich(createDetails)
     stage.setModel({ rig, ...forces })
@@ -31,27 +29,7 @@ export default function SceneDrive({ scene: { train: document, view }, train, mo
   useEffect(() => onThemeChange(() => stage.retheme()), [stage])
   return (
     <div className="live-drive">
-      <div className="btns">
-        <button
-          type="button"
-          className="btn pri ic"
-          aria-label={playing ? 'Pause' : 'Play'}
-          onClick={() => (playing ? clock.pause() : clock.play())}
-        >
-          <Icon name={playing ? 'pause' : 'play'} />
-        </button>
-        <button
-          type="button"
-          className="btn ic"
-          aria-label="Back 1 degree"
-          onClick={() => stepClock(clock, -1)}
-        >
-          <Icon name="back" />
-        </button>
-        <button type="button" className="btn ic" aria-label="On 1 degree" onClick={() => stepClock(clock, 1)}>
-          <Icon name="on" />
-        </button>
-      </div>
+      <PlayButtons clock={clock} />
       <span className="cap pace">
         {view.slowdown > 1 ? `Shown at 1 : ${Math.round(view.slowdown)}` : 'Shown at full speed'}
       </span>

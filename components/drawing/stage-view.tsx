@@ -6,7 +6,15 @@ import type { Clock } from '@/scene/session/clock'
 import { createDetails } from '@/scene/stage/create-details'
 import { createStage } from '@/scene/stage/create-stage'
 import { cutRig } from '@/scene/stage/cut-rig'
-import type { NamedView, RendererKind, Stage, StageEvents, StageLook, StageModel } from '@/scene/stage/types'
+import type {
+  CreateDetails,
+  NamedView,
+  RendererKind,
+  Stage,
+  StageEvents,
+  StageLook,
+  StageModel,
+} from '@/scene/stage/types'
 
 export interface StageViewProps extends StageEvents {
   clock: Clock
@@ -17,6 +25,8 @@ export interface StageViewProps extends StageEvents {
   camera?: Camera | null
   renderer?: RendererKind | 'auto'
   pane?: NamedView
+  /** What stands over the drawing besides; another one mounts the stage anew. */
+  further?: CreateDetails
   /** Names the drawing for those who do not see it. */
   label: string
   description?: string
@@ -27,13 +37,22 @@ export interface StageViewProps extends StageEvents {
 
 /** React's hand on a stage: mounts it once, passes changes on, and never re-renders for an angle. */
 export function StageView(props: StageViewProps) {
-  const { clock, look, camera, renderer = 'auto', pane, label, description, className } = props
+  const { clock, look, camera, renderer = 'auto', pane, further, label, description, className } = props
   const { model: whole, sectionAxial = null } = props
-  const model = useMemo(() => ({ ...whole, rig: cutRig(whole.rig, sectionAxial) }), [whole, sectionAxial])
+  const model = useMemo(
+    () => ({
+      ...whole,
+      rig: cutRig(whole.rig, sectionAxial),
+      past: whole.past && cutRig(whole.past, sectionAxial),
+    }),
+    [whole, sectionAxial],
+  )
   const words = useId()
   const host = useRef<HTMLDivElement>(null)
   const stage = useRef<Stage | null>(null)
-  const onPick = useEffectEvent((part: string | null) => props.onPick?.(part))
+  const onPick = useEffectEvent<NonNullable<StageEvents['onPick']>>((part, world) =>
+    props.onPick?.(part, world),
+  )
   const onHover = useEffectEvent((part: string | null) => props.onHover?.(part))
   const onBalloon = useEffectEvent((number: number) => props.onBalloon?.(number))
   const onCamera = useEffectEvent((next: Camera) => props.onCamera?.(next))
@@ -53,6 +72,7 @@ export function StageView(props: StageViewProps) {
       { renderer: start.renderer, pane, motion: !still },
     )
     created.enrich(createDetails)
+    if (further) created.enrich(further)
     created.setModel(start.model)
     created.setLook(start.look)
     created.setCamera(start.camera)
@@ -63,7 +83,7 @@ export function StageView(props: StageViewProps) {
       onStage(null)
       created.dispose()
     }
-  }, [clock, pane])
+  }, [clock, pane, further])
 
   useEffect(() => stage.current?.setModel(model), [model])
   useEffect(() => stage.current?.setLook(look), [look])

@@ -1,5 +1,6 @@
 import Link from 'next/link'
 import type { SceneSummary } from '@/lib/contracts/scenes'
+import { stateWords } from '@/lib/review/version-states'
 import { Thumbnail } from './thumbnail'
 
 export type SceneAct = 'rename' | 'duplicate' | 'archive' | 'restore'
@@ -43,8 +44,14 @@ export function SceneRow({ scene, number, acts, onAct }: Props) {
         <span className="u"> L</span>
       </td>
       <td className="n ver">
-        <span className="vh">version </span>
-        {scene.headVersion}
+        <Link href={`/scenes/${scene.id}/versions`} prefetch={false} title="All versions">
+          <span className="vh">version </span>
+          {scene.headVersion}
+        </Link>
+        <Link className="cap" href={`/scenes/${scene.id}/review`}>
+          {stateWords[scene.state]}
+          <span className="vh">, review of {scene.title}</span>
+        </Link>
       </td>
       <td className="who2">
         {scene.savedBy}

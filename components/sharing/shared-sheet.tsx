@@ -1,71 +1,41 @@
+import type { ReactNode } from 'react'
 import { LiveScene } from '@/components/drawing/live-scene'
 import { GuestSheet } from '@/components/shell/guest-sheet'
 import { TitleActions, TitleBlock, TitleCell } from '@/components/shell/title-block'
-import type { SharedScene } from '@/lib/contracts/share-links'
+import type { SharedScene } from '@/lib/contracts/shared'
 import type { TrainSummary } from '@/scene/model/summary'
-import { CountOpening } from './count-opening'
-import { PrintButton } from './print-button'
+import { ApprovalStamp } from './approval-stamp'
+import { dayInWords, timeInWords } from './days'
+import { deskPlaces } from './desk-places'
+import { FigureTables } from './figure-tables'
+import { KeptNotice } from './kept-notice'
 
 interface Props {
   shared: SharedScene
-  /** Under which the link's own addresses stand. */
-  base: string
+  /** Address of the picture that stands until the drawing moves. */
+  poster: string
   summary: TrainSummary
+  /** What the page has besides, once the engine is seen. */
+  after: ReactNode
 }
 
-const day = new Intl.DateTimeFormat('en-GB', {
-  day: 'numeric',
-  month: 'long',
-  year: 'numeric',
-  timeZone: 'UTC',
-})
-
 /** What a share link opens: the drawing at the saved angle and view, its figures in words, and whose it is. */
-export function SharedSheet({ shared, base, summary }: Props) {
+export function SharedSheet({ shared, poster, summary, after }: Props) {
+  const { version, versions, approved } = shared
   return (
     <GuestSheet brand={shared.workshop} className="share" words="No account needed">
-      <CountOpening address={`${base}/openings`} />
-      <section className="stage" aria-label="Drawing">
+      <section className="stage" aria-label="Drawing" data-part="drawing">
         <LiveScene
           scene={shared.document}
-          poster={`${base}/poster.png`}
+          poster={poster}
           label={shared.title}
           description={summary.sentence}
+          after={after}
         />
       </section>
-      <section className="walk" aria-label="Figures">
-        <h2>{summary.layout}</h2>
-        <p className="read">{summary.sentence}</p>
-        {summary.tables.map((table) => (
-          <table className="tab figs" key={table.title}>
-            <thead>
-              <tr>
-                <th>{table.title}</th>
-                <th className="r" colSpan={2}>
-                  mm, g
-                </th>
-                <th className="r" colSpan={2}>
-                  in, oz
-                </th>
-              </tr>
-            </thead>
-            <tbody>
-              {table.rows.map((row) => (
-                <tr key={row.name}>
-                  <th scope="row">{row.name}</th>
-                  <td className="n">{row.si.text}</td>
-                  <td className="u">{row.si.unit}</td>
-                  <td className="n">{row.us.text}</td>
-                  <td className="u">{row.us.unit}</td>
-                </tr>
-              ))}
-            </tbody>
-          </table>
-        ))}
-        <p className="caution">
-          Planning figures: rigid crank, steady speed. The maker’s data, the machine shop and a qualified
-          person come first.
-        </p>
+      <section className="walk" aria-label="Figures" data-part="figures">
+        <FigureTables summary={summary} />
+        <KeptNotice days={shared.openingsKeptDays} what="page" />
       </section>
       <TitleBlock>
         <TitleCell k={`Shown by ${shared.workshop}`} span={6} first top>
@@ -73,14 +43,20 @@ export function SharedSheet({ shared, base, summary }: Props) {
         </TitleCell>
         <TitleCell k="Version" span={3} first>
           <span className="v">
-            {shared.version}, saved {day.format(new Date(shared.savedAt))}
+            {version} of {versions}, saved {dayInWords(shared.savedAt)}
           </span>
         </TitleCell>
         <TitleCell k="Open until" span={3}>
-          <span className="v">{shared.endsAt ? day.format(new Date(shared.endsAt)) : 'it is withdrawn'}</span>
+          <span className="v">{shared.endsAt ? timeInWords(shared.endsAt) : 'it is withdrawn'}</span>
+          <span className="cap" id={deskPlaces.ends} />
         </TitleCell>
-        <TitleActions note="Opening this page is counted: how often and when last.">
-          <PrintButton />
+        {approved ? (
+          <TitleCell k="Status" span={6} first>
+            <ApprovalStamp approved={approved} version={version} />
+          </TitleCell>
+        ) : null}
+        <TitleActions>
+          <span className="guest-actions" id={deskPlaces.actions} />
         </TitleActions>
       </TitleBlock>
     </GuestSheet>

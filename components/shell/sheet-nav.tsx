@@ -2,33 +2,40 @@
 
 import Link from 'next/link'
 import { useState } from 'react'
+import { EdgeMenu } from './edge-menu'
 import { Mark } from './mark'
+
+type FormAction = (form: FormData) => void | Promise<void>
 
 export interface SheetPerson {
   name: string
-  workshop: string
+  /** The workshop before them; null for somebody who belongs to none. */
+  workshop: string | null
+  /** Those they may go over to. */
+  others?: { id: string; name: string }[]
+  goOver?: FormAction
 }
 
-export type SheetName = 'scenes' | 'bench' | 'sign-in' | 'none'
+export type SheetName = 'scenes' | 'bench' | 'review' | 'people' | 'settings' | 'account' | 'sign-in' | 'none'
 
 interface Props {
   current: SheetName
   person: SheetPerson | null
-  signOut?: (form: FormData) => void | Promise<void>
+  signOut?: FormAction
 }
 
 /** The upper edge of the sheet: eight zones, the first is home, the last two are workshop and person. */
 export function SheetNav({ current, person, signOut }: Props) {
   const [open, setOpen] = useState(false)
-  const zone = (number: number, name: SheetName, href: string, label: string) => (
-    <div className={`zone-${number}`}>
-      <Link href={href} aria-current={current === name ? 'page' : undefined}>
+  const link = (name: SheetName, href: string, label: string, number?: number) => (
+    <Link href={href} aria-current={current === name ? 'page' : undefined}>
+      {number ? (
         <span className="z" aria-hidden="true">
           {number}
         </span>
-        {label}
-      </Link>
-    </div>
+      ) : null}
+      {label}
+    </Link>
   )
   return (
     <nav className={open ? 'edge edge-t is-open' : 'edge edge-t'} aria-label="Sheets">
@@ -38,50 +45,54 @@ export function SheetNav({ current, person, signOut }: Props) {
           <span>Counterthrow</span>
         </Link>
       </div>
-      {zone(2, 'scenes', '/scenes', 'Scenes')}
-      {zone(3, 'bench', '/bench', 'Bench')}
-      <div className="blank" />
-      <div className="blank" />
+      <div className="zone-2">{link('scenes', '/scenes', 'Scenes', 2)}</div>
+      <div className="zone-3">{link('bench', '/bench', 'Bench', 3)}</div>
       {person ? (
-        <div>
-          {signOut ? (
-            <form action={signOut}>
-              <button type="submit">
-                <span className="z" aria-hidden="true">
-                  6
-                </span>
-                Sign out
-              </button>
-            </form>
-          ) : null}
-        </div>
+        <div className="zone-4">{link('review', '/review', 'Review', 4)}</div>
       ) : (
         <div className="blank" />
       )}
-      <div className={person ? undefined : 'blank'}>
-        {person ? <Who zone={7} text={person.workshop} /> : null}
-      </div>
+      <div className="blank" />
+      <div className="blank" />
       {person ? (
-        <div className="zone-8">
-          <Who zone={8} text={person.name} />
-        </div>
+        <EdgeMenu
+          zone={7}
+          label={person.workshop ?? 'No workshop'}
+          current={current === 'people' || current === 'settings'}
+        >
+          {person.workshop ? (
+            <>
+              {link('people', '/people', 'People')}
+              {link('settings', '/settings', 'Settings')}
+            </>
+          ) : (
+            link('scenes', '/scenes', 'Find a workshop')
+          )}
+          {person.others?.map(({ id, name }) => (
+            <form key={id} action={person.goOver}>
+              <input type="hidden" name="workshop" value={id} />
+              <button type="submit">Go over to {name}</button>
+            </form>
+          ))}
+        </EdgeMenu>
       ) : (
-        zone(8, 'sign-in', '/sign-in', 'Sign in')
+        <div className="blank" />
+      )}
+      {person ? (
+        <EdgeMenu zone={8} label={person.name} current={current === 'account'}>
+          {link('account', '/account', 'Account')}
+          {signOut ? (
+            <form action={signOut}>
+              <button type="submit">Sign out</button>
+            </form>
+          ) : null}
+        </EdgeMenu>
+      ) : (
+        <div className="zone-8">{link('sign-in', '/sign-in', 'Sign in', 8)}</div>
       )}
       <button type="button" className="sheets-button" aria-expanded={open} onClick={() => setOpen(!open)}>
         Sheets
       </button>
     </nav>
-  )
-}
-
-function Who({ zone, text }: { zone: number; text: string }) {
-  return (
-    <div className="who">
-      <span className="z" aria-hidden="true">
-        {zone}
-      </span>
-      <span>{text}</span>
-    </div>
   )
 }

@@ -30,6 +30,8 @@ const offline = () =>
     cure: 'Check the connection and try again; nothing typed is lost.',
   })
 
+const unlikely = { detail: 'The server did not answer as it should.', cure: 'Try again in a minute.' }
+
 export function addressOf(path: string, params: Record<string, string | number> = {}, query: object = {}) {
   const filled = path.replace(/\{(\w+)\}/g, (_, name: string) => encodeURIComponent(String(params[name])))
   const search = new URLSearchParams(
@@ -40,33 +42,40 @@ export function addressOf(path: string, params: Record<string, string | number> 
   return search ? `${filled}?${search}` : filled
 }
 
-/**
- * The browser's end of the HTTP interface: `call<typeof renameScene>({ method, path, … })`, checked against the
- * contract's type alone, so that a light page carries no schema.
- */
-export async function call<O extends OperationContract>(request: Request<O>): Promise<AnswerOf<O>> {
+interface Sent {
+  body?: unknown
+  /** The same key sent again is carried out once. */
+  key?: string
+}
+
+/** Sends to an address and gives what it answers, or throws what it says against it. */
+export async function sendTo<T = void>(
+  method: string,
+  address: string,
+  { body, key }: Sent = {},
+): Promise<T> {
   const headers: Record<string, string> = {}
-  if (request.body !== undefined) headers['content-type'] = 'application/json'
-  if (request.key) headers['idempotency-key'] = request.key
-  const response = await fetch(addressOf(request.path, request.params, request.query), {
-    method: request.method,
+  if (body !== undefined) headers['content-type'] = 'application/json'
+  if (key) headers['idempotency-key'] = key
+  const response = await fetch(address, {
+    method,
     headers,
-    body: request.body === undefined ? undefined : JSON.stringify(request.body),
+    body: body === undefined ? undefined : JSON.stringify(body),
   }).catch(() => {
     throw offline()
   })
   if (response.ok)
-    return (
-      response.status === 204 || response.status === 202 ? undefined : await response.json()
-    ) as AnswerOf<O>
+    return (response.status === 204 || response.status === 202 ? undefined : await response.json()) as T
   const problem = await response.json().catch(() => null)
-  throw new Refusal(
-    response.status,
-    problem?.detail
-      ? problem
-      : { detail: 'The server did not answer as it should.', cure: 'Try again in a minute.' },
-  )
+  throw new Refusal(response.status, problem?.detail ? problem : unlikely)
 }
+
+/**
+ * The browser's end of the HTTP interface: `call<typeof renameScene>({ method, path, … })`, checked against the
+ * contract's type alone, so that a light page carries no schema.
+ */
+export const call = <O extends OperationContract>({ method, path, params, query, ...sent }: Request<O>) =>
+  sendTo<AnswerOf<O>>(method, addressOf(path, params, query), sent)
 
 /** For SWR: the key is the address. */
 export async function readAddress<T>(address: string): Promise<T> {
@@ -75,8 +84,5 @@ export async function readAddress<T>(address: string): Promise<T> {
   })
   const answer = await response.json().catch(() => null)
   if (response.ok) return answer as T
-  throw new Refusal(
-    response.status,
-    answer ?? { detail: 'The server did not answer as it should.', cure: 'Try again in a minute.' },
-  )
+  throw new Refusal(response.status, answer ?? unlikely)
 }

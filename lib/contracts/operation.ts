@@ -1,7 +1,16 @@
 import type { z } from 'zod'
 
 export type LimitName =
-  'reading' | 'writing' | 'analyses' | 'printing' | 'sign-in' | 'sign-up' | 'reset' | 'shared'
+  | 'reading'
+  | 'writing'
+  | 'analyses'
+  | 'printing'
+  | 'sign-in'
+  | 'sign-up'
+  | 'reset'
+  | 'shared'
+  | 'guest-writing'
+  | 'inviting'
 
 /**
  * One operation of the HTTP interface: what the route handler parses and answers, what the client may rely on,
@@ -14,18 +23,20 @@ export interface OperationContract {
   summary: string
   /** `anyone` is open to strangers; `person` wants a signed-in one. */
   for: 'anyone' | 'person'
+  /** What concerns somebody's own account is done by a session, never by a program's token. */
+  atPage?: true
   limit: LimitName
   params?: z.ZodObject
   query?: z.ZodObject
-  body?: z.ZodObject
+  body?: z.ZodObject | z.ZodDiscriminatedUnion
   /** A request sent twice under one Idempotency-Key is carried out once. */
   idempotent?: boolean
-  status: 200 | 201 | 202 | 204
+  status: 200 | 201 | 202 | 204 | 303
   /** Absent where the answer is empty or a file. */
   answer?: z.ZodType
   media?: 'image/png' | 'application/pdf' | 'model/gltf-binary' | 'text/csv'
   /** Problems beside those that follow from the above: status and when. */
-  problems?: Partial<Record<404 | 409 | 503, string>>
+  problems?: Partial<Record<401 | 403 | 404 | 409 | 503, string>>
 }
 
 type Parsed<S> = S extends z.ZodType ? z.output<S> : undefined

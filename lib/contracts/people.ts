@@ -5,11 +5,15 @@ import { operation } from './operation'
 
 export const passwordSchema = z.string().min(10).max(200)
 
+export const personNameSchema = z.string().trim().min(1).max(80)
+
 export const personSchema = z
   .object({
     id: idSchema,
     name: z.string(),
     email: z.string(),
+    /** The workshop before them: what is asked for without naming one is of this. */
+    workshop: idSchema.nullable(),
     workshops: z.array(
       z.object({
         id: idSchema,
@@ -33,7 +37,7 @@ export const signUp = operation({
   for: 'anyone',
   limit: 'sign-up',
   body: z.object({
-    name: z.string().trim().min(1).max(80),
+    name: personNameSchema,
     email: emailSchema,
     password: passwordSchema,
     workshopName: z.string().trim().min(1).max(120).optional(),

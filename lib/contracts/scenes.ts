@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import { operations } from '@/lib/auth/access'
+import { versionStates } from '@/lib/review/version-states'
 import { cursorSchema, idSchema, limitSchema, themeSchema, timeSchema } from './common'
 import { arrivingDocument, sceneDocument } from './documents'
 import { operation } from './operation'
@@ -25,6 +26,8 @@ export const sceneSummarySchema = z
     savedBy: z.string(),
     savedAt: timeSchema,
     message: z.string(),
+    /** Of the head, to those who judge it. */
+    state: z.enum(versionStates),
     createdAt: timeSchema,
     updatedAt: timeSchema,
     duplicatedFrom: z.object({ sceneId: idSchema, version: versionNumber }).nullable(),
@@ -37,6 +40,7 @@ const versionFields = {
   number: versionNumber,
   parent: versionNumber.nullable(),
   message: z.string(),
+  state: z.enum(versionStates),
   author: z.string(),
   createdAt: timeSchema,
 }

@@ -30,6 +30,8 @@ export const mailSchema = z.object({
   to: z.string(),
   subject: z.string(),
   text: z.string(),
+  html: z.string(),
+  headers: z.record(z.string(), z.string()),
   sentAt: timeSchema,
 })
 

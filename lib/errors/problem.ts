@@ -10,10 +10,12 @@ export interface Issue {
 export const problemKinds = {
   unreadable: { status: 400, title: 'The request cannot be read' },
   'not-signed-in': { status: 401, title: 'Not signed in' },
+  'password-wanted': { status: 401, title: 'A password is wanted' },
   'not-allowed': { status: 403, title: 'Not allowed' },
   'foreign-origin': { status: 403, title: 'Sent from another site' },
   'not-found': { status: 404, title: 'Not here' },
   conflict: { status: 409, title: 'Somebody was there first' },
+  held: { status: 409, title: 'Held' },
   taken: { status: 409, title: 'Already in use' },
   'too-large': { status: 413, title: 'Too large' },
   'wrong-type': { status: 415, title: 'Not JSON' },
@@ -71,12 +73,27 @@ export class Problem extends Error {
 export const notSignedIn = () =>
   new Problem('not-signed-in', 'This needs an account.', 'Sign in, then try again.')
 
+/** One text for a token that is unknown, ended, revoked or worth more than the present role of whoever made it. */
+export const tokenUnknown = () =>
+  new Problem('not-signed-in', 'This token opens nothing.', 'Make a new one under Account.')
+
+export const notByToken = () =>
+  new Problem('not-allowed', 'A program cannot do this with a token.', 'Sign in and do it on the page.')
+
 export const notFound = (what: string) =>
   new Problem('not-found', `There is no such ${what} here.`, 'Check the address, or go back to the list.')
 
 /** One text for a link that is unknown, ended or withdrawn. */
 export const linkUnavailable = () =>
   new Problem('not-found', 'This link is not available.', 'Ask the person who sent it.')
+
+/** All that is said of a link with a password to whoever has not given it. */
+export const passwordWanted = () =>
+  new Problem('password-wanted', 'This link wants a password.', 'Ask the person who sent it.')
+
+/** One text for an invitation that is unknown, used, ended or withdrawn. */
+export const invitationUnavailable = () =>
+  new Problem('not-found', 'This invitation is not available.', 'Ask the person who sent it.')
 
 export const refused = (issues: Issue[]) =>
   new Problem(

@@ -4,7 +4,8 @@ import type { Paper } from '@/lib/sheet/sheet-parts'
 import { drawMarks } from './draw-marks'
 import { completenessList, heading, paragraph, table, type Columns } from './flow'
 import { inks } from './inks'
-import { drawFrame, drawTitleBlock, frameOf, pad, titleBlock, type Box } from './sheet-frame'
+import { pdfBytes } from './pdf-bytes'
+import { drawFrame, drawTitleBlock, frameOf, pad, titleBlock, type Box, type TitleBlock } from './sheet-frame'
 import { Tags, type Element } from './tagged'
 import { Typesetter, type FaceFiles } from './typesetter'
 
@@ -46,13 +47,7 @@ export async function designSheet({
   const trial = compose({ content, paper, picture: null, fonts }, 1)
   trial.pdf.end()
   const { pdf } = compose({ content, paper, picture, fonts }, trial.pages)
-  const chunks: Uint8Array[] = []
-  return new Promise((resolve, reject) => {
-    pdf.on('data', (chunk: Uint8Array) => chunks.push(chunk))
-    pdf.on('error', reject)
-    pdf.on('end', () => resolve(joined(chunks)))
-    pdf.end()
-  })
+  return pdfBytes(pdf)
 }
 
 function compose({ content, paper, picture, fonts }: DesignSheet, of: number) {
@@ -82,13 +77,31 @@ function compose({ content, paper, picture, fonts }: DesignSheet, of: number) {
     pages++
     const page = tags.group(tags.root, 'Part')
     drawFrame(type, tags, frame)
-    drawTitleBlock(type, tags, page, frame, content, { number: pages, of })
+    drawTitleBlock(type, tags, page, frame, blockOf(content), { number: pages, of })
     return page
   }
   firstPage(type, tags, newPage(), frame, paper, content, picture)
   flow(type, tags, frame, content, newPage)
   tags.end()
   return { pdf, pages }
+}
+
+/** What stands in the title block: what this is, of what, from when. */
+function blockOf({ stamp, sentence, condition, method }: SheetContent): TitleBlock {
+  const { sceneId, version, changed, date, workshop } = stamp
+  const saved = version === undefined ? 'not saved' : changed ? `${version}, changed since` : `${version}`
+  return {
+    title: stamp.title,
+    sentence,
+    cells: [
+      ['Scene', sceneId ?? 'not saved'],
+      ['Version', saved],
+      ['Date', date],
+      ['Condition', condition],
+      ['Method', method],
+    ],
+    workshop,
+  }
 }
 
 function firstPage(
@@ -194,14 +207,4 @@ function flow(type: Typesetter, tags: Tags, frame: Box, content: SheetContent, n
   for (const words of content.assumptions) paragraph(type, tags, page, columns, words)
   heading(type, tags, page, columns, 'Cautions')
   for (const words of content.cautions) paragraph(type, tags, page, columns, words)
-}
-
-function joined(chunks: readonly Uint8Array[]): Uint8Array<ArrayBuffer> {
-  const all = new Uint8Array(chunks.reduce((sum, { length }) => sum + length, 0))
-  let at = 0
-  for (const chunk of chunks) {
-    all.set(chunk, at)
-    at += chunk.length
-  }
-  return all
 }

@@ -5,4 +5,6 @@ export const inks = {
   line: '#747a7c',
   hair: '#b9b6ab',
   paper: '#ffffff',
+  /** What people have put on the drawing. */
+  pencil: '#7a4cc0',
 } as const

@@ -1,4 +1,3 @@
-import type { SheetContent } from '@/lib/sheet/sheet-content'
 import { inks } from './inks'
 import type { Element, Tags } from './tagged'
 import type { Typesetter } from './typesetter'
@@ -49,13 +48,21 @@ export function drawFrame(type: Typesetter, tags: Tags, frame: Box): void {
   })
 }
 
+export interface TitleBlock {
+  title: string
+  sentence: string
+  /** Five of them, name and value, in the order they are read; the sixth is the number of the page. */
+  cells: [name: string, value: string][]
+  workshop?: string
+}
+
 /** The title block at the bottom right: what this is, of what, from when, which page. */
 export function drawTitleBlock(
   type: Typesetter,
   tags: Tags,
   parent: Element,
   frame: Box,
-  { stamp, sentence, condition, method }: SheetContent,
+  { title: words, sentence, cells, workshop }: TitleBlock,
   page: { number: number; of: number },
 ): void {
   const { pdf } = type
@@ -81,7 +88,7 @@ export function drawTitleBlock(
   })
   const section = tags.group(parent, 'Sect')
   const room = width - 16
-  const title = fitted(type, stamp.title, room)
+  const title = fitted(type, words, room)
   tags.draw(section, page.number === 1 ? 'H1' : 'P', () =>
     type.line(title.text, x + 8, y + 17, { face: 'head', size: title.size, colour: inks.ink }),
   )
@@ -98,21 +105,9 @@ export function drawTitleBlock(
         type.line(line, at, top + 17.5 + 7.6 * i, { face: 'figure', size: 6.8, colour: inks.ink }),
       )
     })
-  cell(0, 0, 'Scene', stamp.sceneId ?? 'not saved')
-  cell(
-    1,
-    0,
-    'Version',
-    stamp.version === undefined
-      ? 'not saved'
-      : stamp.changed
-        ? `${stamp.version}, changed since`
-        : String(stamp.version),
-  )
-  cell(2, 0, 'Date', stamp.date)
-  cell(0, 1, 'Condition', condition)
-  cell(1, 1, 'Method', method)
-  cell(2, 1, 'Sheet', `${page.number} of ${page.of}${stamp.workshop ? `, ${stamp.workshop}` : ''}`)
+  const sheet = `${page.number} of ${page.of}${workshop ? `, ${workshop}` : ''}`
+  for (const [at, [name, value]] of [...cells, ['Sheet', sheet] as const].entries())
+    cell(at % 3, Math.floor(at / 3), name, value)
 }
 
 /** The title as large as its place allows, and cut where even the least size is too long. */

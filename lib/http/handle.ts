@@ -1,11 +1,10 @@
 import type { z } from 'zod'
 import type { Person } from '@/lib/auth/access'
-import { personOfToken } from '@/lib/auth/person'
 import { takeToken } from '@/lib/auth/rate-limit'
-import { sessionTokenFrom } from '@/lib/auth/sessions'
 import type { AnswerOf, BodyOf, OperationContract, ParamsOf, QueryOf } from '@/lib/contracts/operation'
 import { requestIssues } from '@/lib/contracts/request-issues'
-import { notFound, notSignedIn, Problem, refused } from '@/lib/errors/problem'
+import { notByToken, notFound, notSignedIn, Problem, refused, tokenUnknown } from '@/lib/errors/problem'
+import { apiTokenOf, personOf } from './caller'
 import { clientAddress } from './client-address'
 import { problemResponse } from './problem-response'
 import { readJson } from './read-json'
@@ -25,8 +24,6 @@ export interface Input<O extends OperationContract> {
 interface Context {
   params: Promise<Record<string, string | string[] | undefined>>
 }
-
-export const sessionTokenOf = (request: Request) => sessionTokenFrom(request.headers.get('cookie') ?? '')
 
 function parse(schema: z.ZodType | undefined, value: unknown) {
   if (!schema) return undefined
@@ -56,10 +53,12 @@ export function handle<O extends OperationContract>(
 ) {
   return async (request: Request, context: Context): Promise<Response> => {
     try {
-      takeToken(operation.limit, clientAddress(request))
-      if (operation.method !== 'GET') requireSameOrigin(request)
-      const person = operation.for === 'person' ? await personOfToken(sessionTokenOf(request)) : null
-      if (operation.for === 'person' && !person) throw notSignedIn()
+      await takeToken(operation.limit, clientAddress(request))
+      const byToken = apiTokenOf(request) !== null
+      if (operation.method !== 'GET' && !byToken) requireSameOrigin(request)
+      const person = operation.for === 'person' ? await personOf(request) : null
+      if (operation.for === 'person' && !person) throw byToken ? tokenUnknown() : notSignedIn()
+      if (operation.atPage && byToken) throw notByToken()
 
       const params = operation.params?.safeParse(await context.params)
       if (params?.success === false) throw notFound('address')

@@ -51,7 +51,12 @@ function describe(operation: OperationContract): ZodOpenApiOperationObject {
   return {
     operationId: operation.id,
     summary: operation.summary,
-    security: operation.for === 'anyone' ? [] : [{ session: [] }],
+    security:
+      operation.for === 'anyone'
+        ? []
+        : operation.atPage
+          ? [{ session: [] }]
+          : [{ session: [] }, { token: [] }],
     requestParams: {
       ...(operation.params && { path: operation.params }),
       ...(operation.query && { query: operation.query }),
@@ -89,6 +94,12 @@ export function openApiDocument() {
       ),
       securitySchemes: {
         session: { type: 'apiKey', in: 'cookie', name: sessionCookieName, description: 'Set by signing in' },
+        token: {
+          type: 'http',
+          scheme: 'bearer',
+          description:
+            'A token made under Account: acts for whoever made it in one workshop, as a role no greater than theirs. Beside it a cookie counts for nothing.',
+        },
       },
     },
     paths,

@@ -7,6 +7,7 @@ export function problemResponse(error: unknown, request: Request): Response {
     console.error(`${request.method} ${new URL(request.url).pathname}:`, problem.cause ?? problem.message)
   }
   const headers = new Headers({ 'content-type': 'application/problem+json', 'cache-control': 'no-store' })
+  if (problem.kind === 'not-signed-in') headers.set('www-authenticate', 'Bearer')
   if (problem.retryAfterSeconds) headers.set('retry-after', String(problem.retryAfterSeconds))
   return new Response(JSON.stringify(problem), { status: problem.status, headers })
 }

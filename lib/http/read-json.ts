@@ -9,7 +9,7 @@ const tooLarge = () =>
     'Send fewer trace points, or a smaller document.',
   )
 
-async function readBytes(request: Request): Promise<Uint8Array> {
+export async function readBytes(request: Request): Promise<Uint8Array<ArrayBuffer>> {
   if (Number(request.headers.get('content-length') ?? 0) > mostBodyBytes) throw tooLarge()
   const chunks: Uint8Array[] = []
   let size = 0

@@ -2,7 +2,7 @@ import { write } from '@/db/client'
 import type { Person } from '@/lib/auth/access'
 import { authorise } from '@/lib/auth/authorise'
 import type { OpenedScene } from '@/lib/contracts/scenes'
-import { once, requestHash } from './idempotency'
+import { once, requestHash, versionPlace } from './idempotency'
 import { insertScene } from './insert-scene'
 import { openedScene } from './scene-answers'
 import { acceptScene } from './scene-document'
@@ -31,6 +31,7 @@ export async function createScene(
       person.id,
       key,
       requestHash('create', workshopId, wanted),
+      versionPlace,
       () => insertScene(tx, { workshopId, actorId: person.id, title, message, document }),
     )
     return openedScene(tx, person, sceneId, version)

@@ -5,7 +5,7 @@ import type { Person } from '@/lib/auth/access'
 import { authorise } from '@/lib/auth/authorise'
 import type { OpenedScene } from '@/lib/contracts/scenes'
 import { notFound } from '@/lib/errors/problem'
-import { once, requestHash } from './idempotency'
+import { once, requestHash, versionPlace } from './idempotency'
 import { insertScene } from './insert-scene'
 import { openedScene } from './scene-answers'
 import { storedScene } from './scene-document'
@@ -23,7 +23,7 @@ export async function duplicateScene(
     if (!scene) throw notFound('scene')
     const from = await versionOf(tx, id, wanted.version ?? scene.headVersion)
     if (!from) throw notFound('version')
-    const place = await once(tx, person.id, key, requestHash('duplicate', id, wanted), () =>
+    const place = await once(tx, person.id, key, requestHash('duplicate', id, wanted), versionPlace, () =>
       insertScene(tx, {
         workshopId: scene.workshopId,
         actorId: person.id,

@@ -9,16 +9,22 @@ import { Problem } from '@/lib/errors/problem'
 export const requestHash = (...parts: unknown[]) =>
   createHash('sha256').update(JSON.stringify(parts)).digest('hex')
 
-/** Where to find what was made. */
-const placeSchema = z.object({ sceneId: z.string(), version: z.number() })
-export type Place = z.output<typeof placeSchema>
+/** Where to find a version that was made. */
+export const versionPlace = z.object({ sceneId: z.string(), version: z.number() })
+export type VersionPlace = z.output<typeof versionPlace>
+/** The same of a note in its scene. */
+export const notePlace = z.object({ number: z.number() })
 
-/** Does the work once for each person and key: a repetition, also one at the same moment, finds what the first made. */
-export async function once(
+/**
+ * Does the work once for each person and key: a repetition, also one at the same moment, finds what the first made by the
+ * place that was kept of it.
+ */
+export async function once<Place extends object>(
   tx: Transaction,
   userId: string,
   key: string | undefined,
   hash: string,
+  placeSchema: z.ZodType<Place>,
   work: () => Promise<Place>,
 ): Promise<Place> {
   if (key === undefined) return work()

@@ -3,7 +3,8 @@ import { scenes, sceneVersions } from '@/db/schema'
 import { newId } from '@/db/schema/columns'
 import type { Scene } from '@/scene/model/scene'
 import { audit } from './audit'
-import type { Place } from './idempotency'
+import type { VersionPlace } from './idempotency'
+import { drawLater } from './pictures/draw-later'
 import { sceneFigures } from './scene-document'
 
 interface NewScene {
@@ -12,11 +13,11 @@ interface NewScene {
   title: string
   message: string
   document: Scene
-  duplicatedFrom?: Place
+  duplicatedFrom?: VersionPlace
 }
 
 /** A new scene with its version 1, whoever asks for it and why. */
-export async function insertScene(tx: Transaction, wanted: NewScene): Promise<Place> {
+export async function insertScene(tx: Transaction, wanted: NewScene): Promise<VersionPlace> {
   const { workshopId, actorId, title, message, document, duplicatedFrom } = wanted
   const id = newId()
   await tx.insert(scenes).values({
@@ -31,6 +32,7 @@ export async function insertScene(tx: Transaction, wanted: NewScene): Promise<Pl
   await tx
     .insert(sceneVersions)
     .values({ sceneId: id, number: 1, message, authorId: actorId, document, ...sceneFigures(document) })
+  await drawLater(tx, id, 1)
   await audit(tx, {
     actorId,
     workshopId,

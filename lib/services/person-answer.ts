@@ -5,6 +5,7 @@ export const personAnswer = (person: Person): PersonAnswer => ({
   id: person.id,
   name: person.name,
   email: person.email,
+  workshop: person.workshopId,
   workshops: person.memberships.map(({ workshopId, workshopName, role }) => ({
     id: workshopId,
     name: workshopName,

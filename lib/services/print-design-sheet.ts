@@ -1,16 +1,13 @@
-import { readFile } from 'node:fs/promises'
-import { join } from 'node:path'
 import type { Person } from '@/lib/auth/access'
 import type { printDesignSheet as contract } from '@/lib/contracts/design-sheets'
 import type { BodyOf } from '@/lib/contracts/operation'
 import { notSignedIn } from '@/lib/errors/problem'
 import { designSheet, pictureBox, type DesignSheet } from '@/lib/export/design-sheet'
-import { faceFiles } from '@/lib/export/font-files'
-import { faces, type FaceFiles } from '@/lib/export/typesetter'
 import { sheetContent, type SheetStamp } from '@/lib/sheet/sheet-content'
 import type { Paper, SheetPart, SheetUnits } from '@/lib/sheet/sheet-parts'
 import type { Scene } from '@/scene/model/scene'
 import { openScene } from './open-scene'
+import { printFonts } from './print-fonts'
 import { printedScene } from './printed-scene'
 
 /** Draws the engine for a place of this size in points. */
@@ -72,17 +69,4 @@ async function print(
     ? Uint8Array.from(await draw(scene, pictureBox(paper)))
     : null
   return designSheet({ content, paper, picture, fonts: await printFonts() })
-}
-
-let fonts: Promise<FaceFiles> | undefined
-
-/** Read once: they are part of the program. */
-const printFonts = () => (fonts ??= readFonts())
-
-async function readFonts(): Promise<FaceFiles> {
-  const files = faces.map(async (face) => {
-    const path = join(/* turbopackIgnore: true */ process.cwd(), faceFiles[face])
-    return [face, Uint8Array.from(await readFile(path))] as const
-  })
-  return Object.fromEntries(await Promise.all(files)) as FaceFiles
 }

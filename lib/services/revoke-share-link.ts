@@ -1,21 +1,18 @@
 import { and, eq, isNull, sql } from 'drizzle-orm'
 import { write } from '@/db/client'
-import { sceneById } from '@/db/queries/scenes'
 import { linkById } from '@/db/queries/share-links'
 import { shareLinks } from '@/db/schema'
 import type { Person } from '@/lib/auth/access'
-import { authorise } from '@/lib/auth/authorise'
 import type { ShareLink } from '@/lib/contracts/share-links'
 import { notFound } from '@/lib/errors/problem'
 import { audit } from './audit'
+import { linkOf } from './link-of'
 import { shareLinkAnswer } from './share-link-answer'
 
 /** From now on it opens nothing, for good. Withdrawing it again changes nothing. */
 export async function revokeShareLink(person: Person | null, id: string): Promise<ShareLink> {
   return write(async (tx) => {
-    const found = await linkById(tx, id)
-    const scene = found && (await sceneById(tx, found.link.sceneId))
-    authorise(person, 'link.revoke', scene, 'link')
+    const { scene, person: by } = await linkOf(tx, person, 'link.revoke', id)
     const revoked = await tx
       .update(shareLinks)
       .set({ revokedAt: sql`now()` })
@@ -23,8 +20,8 @@ export async function revokeShareLink(person: Person | null, id: string): Promis
       .returning({ revokedAt: shareLinks.revokedAt })
     if (revoked.length > 0) {
       await audit(tx, {
-        actorId: person.id,
-        workshopId: scene?.workshopId ?? null,
+        actorId: by.id,
+        workshopId: scene.workshopId,
         operation: 'link.revoke',
         subject: `link:${id}`,
         before: { revokedAt: null },

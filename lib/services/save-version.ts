@@ -9,8 +9,9 @@ import type { OpenedScene, SaveConflict } from '@/lib/contracts/scenes'
 import { notFound, Problem, refused } from '@/lib/errors/problem'
 import type { Scene } from '@/scene/model/scene'
 import { audit } from './audit'
-import { once, requestHash } from './idempotency'
+import { once, requestHash, versionPlace } from './idempotency'
 import { deleteDraft, upsertDraft } from './drafts'
+import { drawLater } from './pictures/draw-later'
 import { openedScene, versionAnswer } from './scene-answers'
 import { acceptScene, sceneFigures } from './scene-document'
 
@@ -19,6 +20,9 @@ interface Save {
   message: string
   document: unknown
 }
+
+/** What becomes of the person's draft of the scene: saved with this, or left as it is since it is something else. */
+type DraftFate = 'saved' | 'left'
 
 /** The base is not the head, so nothing is saved; both stand in the answer, and yours is kept as a draft. */
 class Overtaken extends Error {}
@@ -29,22 +33,31 @@ export async function saveVersion(
   id: string,
   save: Save,
   key?: string,
+  draft: DraftFate = 'saved',
 ): Promise<OpenedScene> {
   const document = acceptScene(save.document)
   try {
     return await write(async (tx) => {
       const scene = await lockScene(tx, id)
       authorise(person, 'scene.save', scene)
-      const { sceneId, version } = await once(tx, person.id, key, requestHash('save', id, save), async () => {
-        if (save.base !== scene.headVersion) throw new Overtaken()
-        const number = scene.headVersion + 1
-        await insertVersion(tx, person, scene, number, save.message, document)
-        return { sceneId: id, version: number }
-      })
+      const { sceneId, version } = await once(
+        tx,
+        person.id,
+        key,
+        requestHash('save', id, save),
+        versionPlace,
+        async () => {
+          if (save.base !== scene.headVersion) throw new Overtaken()
+          const number = scene.headVersion + 1
+          await insertVersion(tx, person, scene, number, save.message, document)
+          if (draft === 'saved') await deleteDraft(tx, person.id, scene.id)
+          return { sceneId: id, version: number }
+        },
+      )
       return openedScene(tx, person, sceneId, version)
     })
   } catch (error) {
-    if (error instanceof Overtaken && person) throw await conflict(person, id, save, document)
+    if (error instanceof Overtaken && person) throw await conflict(person, id, save, document, draft)
     throw error
   }
 }
@@ -70,7 +83,7 @@ async function insertVersion(
     .update(scenes)
     .set({ headVersion: number, updatedAt: sql`now()` })
     .where(eq(scenes.id, scene.id))
-  await deleteDraft(tx, person.id, scene.id)
+  await drawLater(tx, scene.id, number)
   await audit(tx, {
     actorId: person.id,
     workshopId: scene.workshopId,
@@ -81,7 +94,13 @@ async function insertVersion(
   })
 }
 
-async function conflict(person: Person, id: string, save: Save, document: Scene): Promise<Problem> {
+async function conflict(
+  person: Person,
+  id: string,
+  save: Save,
+  document: Scene,
+  draft: DraftFate,
+): Promise<Problem> {
   const { base, message } = save
   return write(async (tx) => {
     const scene = await lockScene(tx, id)
@@ -93,7 +112,7 @@ async function conflict(person: Person, id: string, save: Save, document: Scene)
     }
     const [head, from] = [await versionOf(tx, id, scene.headVersion), await versionOf(tx, id, base)]
     if (!head || !from) throw notFound('version')
-    await upsertDraft(tx, person.id, id, { base, document })
+    if (draft === 'saved') await upsertDraft(tx, person.id, id, { base, document })
     const members: SaveConflict = {
       head: versionAnswer(head),
       base: versionAnswer(from),
@@ -102,7 +121,7 @@ async function conflict(person: Person, id: string, save: Save, document: Scene)
     return new Problem(
       'conflict',
       `Version ${head.number} was saved by ${head.author} after the version ${base} that yours was made from.`,
-      'Compare the two; then save yours on top of it, save it as a scene of its own, or let it go. It is kept as your draft.',
+      `Compare the two; then save yours on top of it, save it as a scene of its own, or let it go.${draft === 'saved' ? ' It is kept as your draft.' : ''}`,
       { members: { ...members } },
     )
   })

@@ -3,7 +3,7 @@ import { versionOf, type VersionRow } from '@/db/queries/scene-versions'
 import { sceneById } from '@/db/queries/scenes'
 import type { Transaction } from '@/db/client'
 import { operationsOf, roleIn, type Person } from '@/lib/auth/access'
-import type { OpenedScene, SceneSummary, VersionAnswer } from '@/lib/contracts/scenes'
+import type { OpenedScene, SceneSummary, VersionAnswer, VersionSummary } from '@/lib/contracts/scenes'
 import { notFound } from '@/lib/errors/problem'
 import { storedScene } from './scene-document'
 import { scenePattern } from './scene-pattern'
@@ -20,6 +20,7 @@ export const sceneSummary = (row: SceneRow): SceneSummary => ({
   savedBy: row.savedBy,
   savedAt: row.savedAt.toISOString(),
   message: row.message,
+  state: row.state,
   createdAt: row.createdAt.toISOString(),
   updatedAt: row.updatedAt.toISOString(),
   duplicatedFrom:
@@ -29,12 +30,13 @@ export const sceneSummary = (row: SceneRow): SceneSummary => ({
   thumbnailUrl: `/api/v1/scenes/${row.id}/thumbnail.png?version=${row.headVersion}`,
 })
 
+export const versionSummary = ({ document: _unread, createdAt, ...row }: VersionRow): VersionSummary => ({
+  ...row,
+  createdAt: createdAt.toISOString(),
+})
+
 export const versionAnswer = (row: VersionRow): VersionAnswer => ({
-  number: row.number,
-  parent: row.parent,
-  message: row.message,
-  author: row.author,
-  createdAt: row.createdAt.toISOString(),
+  ...versionSummary(row),
   document: storedScene(row.document),
 })
 

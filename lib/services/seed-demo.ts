@@ -1,17 +1,21 @@
 import { eq } from 'drizzle-orm'
 import { read, write, type Transaction } from '@/db/client'
-import { membershipsOf } from '@/db/queries/memberships'
 import { userByEmail } from '@/db/queries/users'
 import { memberships, seeds, shareLinks, users, workshops } from '@/db/schema'
-import { mailer } from '@/lib/adapters/mail'
-import type { Person } from '@/lib/auth/access'
+import type { LinkKind, Person } from '@/lib/auth/access'
 import { hashPassword } from '@/lib/auth/passwords'
+import { personOfUser } from '@/lib/auth/person'
 import { archiveScene } from './archive-scene'
 import { audit } from './audit'
 import { createScene } from './create-scene'
 import { createShareLink } from './create-share-link'
 import { demo } from './demo/people'
+import { demoInvitations } from './demo/invitations'
+import { visitLink } from './demo/link-visits'
+import { demoGuestNote, demoNotes } from './demo/notes'
+import { demoReviews } from './demo/reviews'
 import { demoScenes } from './demo/scenes'
+import { sendLinks } from './demo/sent-links'
 import { listShareLinks } from './list-share-links'
 import { revokeShareLink } from './revoke-share-link'
 import { saveDraft } from './save-draft'
@@ -39,6 +43,9 @@ export async function seedDemo(): Promise<void> {
     places[name] = made.scene.id
   }
 
+  await demoNotes(people['ysolde@larkspur.example'], people['ines@quillmarsh.example'], places)
+  await demoReviews(people['ysolde@larkspur.example'], people['ines@quillmarsh.example'], places)
+  await demoInvitations(people['tamsin@thornquay.example'])
   await makeLinks(people['fenn@larkspur.example'], places.cross)
   await saveDraft(people['ysolde@larkspur.example'], places.twin, {
     base: 3,
@@ -76,7 +83,7 @@ async function readPeople(tx: Transaction): Promise<Record<string, Person>> {
   for (const { email } of demo.people) {
     const user = await userByEmail(tx, email)
     if (!user) throw new Error(`${email} is missing.`)
-    people[email] = { id: user.id, name: user.name, email, memberships: await membershipsOf(tx, user.id) }
+    people[email] = await personOfUser(tx, user)
   }
   return people
 }
@@ -84,8 +91,9 @@ async function readPeople(tx: Transaction): Promise<Record<string, Person>> {
 /** One link that opens, one withdrawn and one past its end; the mail with the first can be read in the local post. */
 async function makeLinks(fenn: Person, sceneId: string): Promise<void> {
   if ((await listShareLinks(fenn, sceneId)).length > 0) return
-  const make = (label: string, version: number | null, days: number) =>
+  const make = (label: string, version: number | null, days: number, kind: LinkKind = 'look') =>
     createShareLink(fenn, sceneId, {
+      kind,
       label,
       version,
       endsAt: new Date(Date.now() + days * day).toISOString(),
@@ -100,10 +108,8 @@ async function makeLinks(fenn: Person, sceneId: string): Promise<void> {
   )
   const withdrawn = await make('Sent to the wrong address', 2, 30)
   await revokeShareLink(fenn, withdrawn.link.id)
-  const live = await make('For Delphine Astercroft', null, 30)
-  await mailer().send({
-    to: 'delphine@example.com',
-    subject: 'Your V8, running',
-    text: `Delphine,\n\nhere is the cross-plane engine we talked about; it opens without an account:\n\n${live.url}\n\nFenn`,
-  })
+  const live = await make('For Delphine Astercroft', null, 30, 'note')
+  await sendLinks(fenn, demoScenes.cross.title, { live: live.url, astray: withdrawn.url })
+  await visitLink(live)
+  await demoGuestNote(live.url.split('/s/')[1])
 }

@@ -1,10 +1,10 @@
 import { and, eq, lt, sql } from 'drizzle-orm'
 import { read, write, type Transaction } from '@/db/client'
-import { membershipsOf } from '@/db/queries/memberships'
 import { userByEmail } from '@/db/queries/users'
 import { idempotencyKeys, sessions } from '@/db/schema'
 import type { Person } from '@/lib/auth/access'
 import { verifyPassword } from '@/lib/auth/passwords'
+import { personOfUser } from '@/lib/auth/person'
 import { forgetTokens, takeToken } from '@/lib/auth/rate-limit'
 import { beginSession, type NewSession } from '@/lib/auth/sessions'
 import { Problem } from '@/lib/errors/problem'
@@ -14,8 +14,9 @@ import { audit } from './audit'
 export async function signIn(
   email: string,
   password: string,
+  userAgent: string,
 ): Promise<{ person: Person; session: NewSession }> {
-  takeToken('sign-in-account', email)
+  await takeToken('sign-in-account', email)
   const user = await read((tx) => userByEmail(tx, email))
   if (!(await verifyPassword(user?.passwordHash, password)) || !user) {
     throw new Problem(
@@ -24,9 +25,9 @@ export async function signIn(
       'Check both, or ask for a new password.',
     )
   }
-  forgetTokens('sign-in-account', email)
-  const session = await beginSession(user.id)
-  const memberships = await write(async (tx) => {
+  await forgetTokens('sign-in-account', email)
+  const session = await beginSession(user.id, userAgent)
+  const person = await write(async (tx) => {
     await audit(tx, {
       actorId: user.id,
       workshopId: null,
@@ -34,9 +35,9 @@ export async function signIn(
       subject: `person:${user.id}`,
     })
     await forgetOld(tx, user.id)
-    return membershipsOf(tx, user.id)
+    return personOfUser(tx, user)
   })
-  return { person: { id: user.id, name: user.name, email: user.email, memberships }, session }
+  return { person, session }
 }
 
 /** What has ended is of no use to anybody; the keys of requests are kept for as long as one may be sent again. */

@@ -1,2 +1,1 @@
-export const namedViews = ['free', 'end', 'drive', 'side', 'bank', 'top'] as const
-export type NamedView = (typeof namedViews)[number]
+export { namedViews, type NamedView } from '@/scene/model/named-views'

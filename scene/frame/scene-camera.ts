@@ -15,9 +15,9 @@ export function cameraOf({ yawDeg, pitchDeg, distanceMm, targetMm }: SceneCamera
   }
 }
 
-/** The stage's camera as the document keeps it: a hundredth of a degree and of a millimetre are enough. */
-export function sceneCameraOf({ yaw, pitch, distance, target }: Camera): SceneCamera {
-  const round = (value: number) => Math.round(value * 100) / 100 + 0
+/** The stage's camera as the document keeps it: for a view, a hundredth of a degree and of a millimetre are enough. */
+export function sceneCameraOf({ yaw, pitch, distance, target }: Camera, steps = 100): SceneCamera {
+  const round = (value: number) => Math.round(value * steps) / steps + 0
   return {
     yawDeg: round(yaw / DEGREE),
     pitchDeg: round(pitch / DEGREE),

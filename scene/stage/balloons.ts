@@ -3,6 +3,7 @@ import { HIDDEN } from '@/scene/frame/types'
 import { createPlaces, layOut, uncross, type BalloonPlaces } from './balloon-places'
 import type { Palette } from './palette'
 import { solid, type Pen } from './paint-arrow'
+import { paintLeader, type LeaderForm } from './paint-leader'
 import type { Balloon, Picture } from './types'
 
 /** Numbered balloons of the parts list: buttons down the sides of the sheet, leaders on the overlay. */
@@ -33,6 +34,7 @@ export function createBalloons(layer: HTMLElement, onBalloon: (number: number) =
   let buttons = new Map<number, HTMLButtonElement>()
   let standing: Standing[] = []
   let places: BalloonPlaces = createPlaces(0)
+  const form: LeaderForm = { colour: '', width: 0.8, dot: 2, dashes: solid }
   let settled = false
   /** Other balloons, or other parts to stand on: not to be put off. */
   let fresh = true
@@ -115,32 +117,12 @@ export function createBalloons(layer: HTMLElement, onBalloon: (number: number) =
       if (uncross(places)) move()
     },
     paint(pen, palette) {
-      pen.setLineDash(solid)
       for (let i = 0; i < standing.length; i++) {
-        const { state } = standing[i].balloon
+        form.colour = standing[i].balloon.state === 'bad' ? palette.pencil : palette.ink
         const at = 2 * places.at[i]
         const x = places.place[at]
         const y = places.place[at + 1]
-        const dx = places.dot[2 * i] - x
-        const dy = places.dot[2 * i + 1] - y
-        const length = Math.hypot(dx, dy)
-        if (length <= radius) continue
-        const colour = state === 'bad' ? palette.pencil : palette.ink
-        pen.beginPath()
-        pen.moveTo(x + (dx * radius) / length, y + (dy * radius) / length)
-        pen.lineTo(x + dx, y + dy)
-        pen.globalAlpha = 0.75
-        pen.strokeStyle = palette.paper
-        pen.lineWidth = 3
-        pen.stroke()
-        pen.globalAlpha = 1
-        pen.strokeStyle = colour
-        pen.lineWidth = 0.8
-        pen.stroke()
-        pen.beginPath()
-        pen.arc(x + dx, y + dy, 2, 0, 2 * Math.PI)
-        pen.fillStyle = colour
-        pen.fill()
+        paintLeader(pen, palette, form, radius, x, y, places.dot[2 * i], places.dot[2 * i + 1])
       }
     },
   }

@@ -14,7 +14,8 @@ import { listWords, placeWords, type WordSheet } from './words'
 const hasForces = (model: MovingModel): model is StageModel => 'plan' in model
 
 /** Forces, marks, labels, balloons, legend, picking, gestures and keys. */
-export const createDetails: CreateDetails = (hold) => {
+export const createDetails: CreateDetails = (hold, under) => {
+  if (under) return under
   const { host, clock, events, pane, eye, sheet } = hold
   const layers = createUpperLayers(host, !pane)
   const labels = createLabels(layers.written)
@@ -49,7 +50,7 @@ export const createDetails: CreateDetails = (hold) => {
           hold.moved()
         },
         view: hold.view,
-        pick: (at) => events.onPick?.(partAt(at)),
+        pick: (at) => events.onPick?.(partAt(at), ray.hit),
         hover(at) {
           pointer = at
           pointed = true

@@ -192,22 +192,25 @@ export const createStage: CreateStage = (host, clock, events, options) => {
       touch()
     },
     enrich(createDetails) {
-      if (details || gone) return
-      details = createDetails({
-        ...{ host, clock, events, pane, eye, sheet, touch, wake: seat.wake, view: frameAs },
-        get palette() {
-          return palette
+      if (gone) return
+      details = createDetails(
+        {
+          ...{ host, clock, events, pane, eye, sheet, touch, wake: seat.wake, view: frameAs },
+          get palette() {
+            return palette
+          },
+          move(camera) {
+            framed = null
+            eye.set(camera)
+            touch()
+          },
+          moved() {
+            touch()
+            tellCamera(eye.camera)
+          },
         },
-        move(camera) {
-          framed = null
-          eye.set(camera)
-          touch()
-        },
-        moved() {
-          touch()
-          tellCamera(eye.camera)
-        },
-      })
+        details,
+      )
       standPicture()
     },
     dispose() {

@@ -9,6 +9,7 @@ import { paintArrow, paintRing, type ArrowForm, type Pen } from './paint-arrow'
 import { paintDiamond } from './paint-diamond'
 import { paintPath, type PathForm } from './paint-path'
 import type { Palette } from './palette'
+import { buildGhost, paintGhost, type Ghost } from './past-ghost'
 import type { ForcedPicture } from './forced-picture'
 import { scaleBar, type ScaleBar } from './scale-bar'
 import { createPath, fillCoupleArc, fillRotation, type SpacePath } from './space-paths'
@@ -17,6 +18,7 @@ import type { StageLook } from './types'
 /** The vectors and marks over the engine: their buffers live as long as the picture does. */
 export interface Overlay {
   picture: ForcedPicture
+  past: Ghost | null
   arrows: Arrows
   /** Of world per newton: the page's one scale. */
   metresPerNewton: number
@@ -49,6 +51,7 @@ export function createOverlay(picture: ForcedPicture): Overlay {
   fillRotation(rotation, rig)
   return {
     picture,
+    past: model.past ? buildGhost(model.past, rig) : null,
     arrows: buildArrows(rig, model.plan.train),
     metresPerNewton,
     orbit: { points: orbit, count: orbit.length / 3 },
@@ -67,6 +70,8 @@ export function paintOverlay(pen: Pen, overlay: Overlay, view: OverlayView): voi
   const { look, palette, width, height } = view
   const { overlays } = look
   pen.clearRect(0, 0, width, height)
+  const { past, picture } = overlay
+  if (past) paintGhost(pen, past, picture.instant.angle, picture.frame, palette, look.hidden, width, height)
   if (overlays.labels) paintSpacePath(pen, overlay, view, overlay.rotation, 'rotation')
   if (overlays.orbit) paintSpacePath(pen, overlay, view, overlay.orbit, 'orbit')
   if (overlays.shaking) paintCouple(pen, overlay, view)

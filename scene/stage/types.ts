@@ -9,6 +9,8 @@ import type { Palette } from './palette'
 /** All that a picture needs to move. */
 export interface MovingModel {
   rig: Rig
+  /** An older version of the engine, drawn over it as a ghost at the same crank angle. */
+  past?: Rig
 }
 
 /** Everything one stage moves its parts with, in buffers that live as long as the model does. */
@@ -65,7 +67,8 @@ export interface StageLook {
 export type RendererKind = 'webgl' | 'canvas'
 
 export interface StageEvents {
-  onPick?(part: string | null): void
+  /** `world` is where it was met, m, until the next pick. */
+  onPick?(part: string | null, world: ArrayLike<number>): void
   onHover?(part: string | null): void
   onBalloon?(number: number): void
   /** After an orbit, pan or zoom has ended, or a named view was taken. */
@@ -134,7 +137,8 @@ export interface SheetSize {
   ratio: number
 }
 
-export type CreateDetails = (hold: Hold) => Details
+/** Further details go over the first and carry out what those `under` them do, too. */
+export type CreateDetails = (hold: Hold, under: Details | null) => Details
 
 export interface Stage {
   /** A model without forces can only move. */
@@ -147,7 +151,7 @@ export interface Stage {
   setRenderer(kind: RendererKind | 'auto'): void
   /** Colours have changed (theme). */
   retheme(): void
-  /** Brings the details in, once. */
+  /** Brings the details in, or further ones over them. */
   enrich(createDetails: CreateDetails): void
   dispose(): void
 }

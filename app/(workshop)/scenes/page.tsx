@@ -2,11 +2,13 @@ import type { Metadata } from 'next'
 import Link from 'next/link'
 import { redirect } from 'next/navigation'
 import { signOutAction } from '@/app/actions'
+import { sheetPerson } from '@/app/sheet-person'
+import { WithoutWorkshop } from '@/app/without-workshop'
 import { SceneRegister } from '@/components/scenes/scene-register'
 import { Stencil } from '@/components/scenes/stencil'
 import { Sheet } from '@/components/shell/sheet'
 import { TitleActions, TitleBlock, TitleCell } from '@/components/shell/title-block'
-import { operationsOf } from '@/lib/auth/access'
+import { operationsOf, presentMembership } from '@/lib/auth/access'
 import { currentPerson } from '@/lib/auth/current-person'
 import { presets } from '@/scene/model/presets'
 
@@ -15,14 +17,10 @@ export const metadata: Metadata = { title: 'Scenes' }
 export default async function ScenesPage() {
   const person = await currentPerson()
   if (!person) redirect('/sign-in?next=/scenes')
-  const [membership] = person.memberships
+  const membership = presentMembership(person)
+  if (!membership) return <WithoutWorkshop person={person} />
   return (
-    <Sheet
-      current="scenes"
-      className="scenes"
-      person={{ name: person.name, workshop: membership.workshopName }}
-      signOut={signOutAction}
-    >
+    <Sheet current="scenes" className="scenes" person={sheetPerson(person)} signOut={signOutAction}>
       <SceneRegister workshop={membership.workshopId} may={operationsOf(membership.role)} />
       <Stencil layouts={presets} />
       <TitleBlock>

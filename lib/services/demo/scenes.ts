@@ -33,8 +33,12 @@ const cross = train('v8x-5000')
 const flat = train('v8f-4200')
 const twin = train('v2-45-1600')
 const diesel = train('i6d-12800')
-const wider: CrankTrain = {
+const lighterPin: CrankTrain = {
   ...cross,
+  masses: { ...cross.masses, pistonPinKg: (cross.masses.pistonPinKg ?? 0) - 0.002 },
+}
+const wider: CrankTrain = {
+  ...lighterPin,
   counterweights: cross.counterweights.map((weight) => ({ ...weight, radiusMm: weight.radiusMm + 1 })),
 }
 
@@ -51,6 +55,7 @@ export const demoScenes = {
     versions: [
       version('As drawn', look(cross)),
       version('Looked at from the drive end, at 7000 rpm', look(cross, { speedRpm: 7000, angleDeg: 90 })),
+      version('Piston pins 2 g lighter', look(lighterPin, { speedRpm: 7000, angleDeg: 90 })),
       version('Every counterweight 1 mm further out', look(wider, { speedRpm: 7000, angleDeg: 90 })),
     ],
   },

@@ -1,7 +1,7 @@
 import type { Metadata } from 'next'
 import { notFound } from 'next/navigation'
 import { connection } from 'next/server'
-import { MailSheet } from '@/components/account/mail-sheet'
+import { LocalMailSheet } from '@/components/mail/local-mail-sheet'
 import { keptMails } from '@/lib/adapters/mail/local'
 import { config } from '@/lib/config'
 
@@ -15,6 +15,6 @@ export const metadata: Metadata = {
 export default async function LocalMailPage() {
   await connection()
   const { mail, loopback } = config()
-  if (mail !== 'local' || !loopback) notFound()
-  return <MailSheet mails={await keptMails()} />
+  if (mail.by !== 'local' || !loopback) notFound()
+  return <LocalMailSheet first={{ mails: await keptMails() }} />
 }

@@ -1,13 +1,13 @@
-import { personOfToken } from '@/lib/auth/person'
 import { printDesignSheet as contract } from '@/lib/contracts/design-sheets'
-import { handle, sessionTokenOf } from '@/lib/http/handle'
+import { personOf } from '@/lib/http/caller'
+import { handle } from '@/lib/http/handle'
 import { printDesignSheet } from '@/lib/services/print-design-sheet'
 import { fileResponse } from '../file-response'
-import { drawForPrint } from '../print-picture'
+import { drawForPrint } from '@/lib/pictures/print-picture'
 
 export const POST = handle(contract, async ({ request, body }) => {
   // open to anyone: who asks matters only where a saved version is named
-  const person = body.of ? await personOfToken(sessionTokenOf(request)) : null
+  const person = body.of ? await personOf(request) : null
   return fileResponse(
     await printDesignSheet(person, body, drawForPrint),
     'application/pdf',

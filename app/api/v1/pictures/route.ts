@@ -2,8 +2,8 @@ import { pictureOf } from '@/lib/contracts/models'
 import { handle } from '@/lib/http/handle'
 import { printedScene } from '@/lib/services/printed-scene'
 import { fileResponse } from '../file-response'
-import { printTheme } from '../print-picture'
-import { drawScene } from '../scene-picture'
+import { printTheme } from '@/lib/pictures/print-picture'
+import { drawScene } from '@/lib/pictures/scene-picture'
 
 export const POST = handle(pictureOf, async ({ body }) => {
   const { width, height, theme } = body

@@ -1,9 +1,9 @@
-import { personOfToken } from '@/lib/auth/person'
 import { getSession } from '@/lib/contracts/people'
-import { handle, sessionTokenOf } from '@/lib/http/handle'
+import { personOf } from '@/lib/http/caller'
+import { handle } from '@/lib/http/handle'
 import { personAnswer } from '@/lib/services/person-answer'
 
 export const GET = handle(getSession, async ({ request }) => {
-  const person = await personOfToken(sessionTokenOf(request))
+  const person = await personOf(request)
   return { person: person && personAnswer(person) }
 })

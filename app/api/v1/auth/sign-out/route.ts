@@ -1,6 +1,7 @@
 import { blankSessionCookie } from '@/lib/auth/sessions'
 import { signOut as contract } from '@/lib/contracts/people'
-import { handle, sessionTokenOf } from '@/lib/http/handle'
+import { sessionTokenOf } from '@/lib/http/caller'
+import { handle } from '@/lib/http/handle'
 import { signOut } from '@/lib/services/sign-out'
 
 export const POST = handle(contract, async ({ request, headers }) => {

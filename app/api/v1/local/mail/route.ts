@@ -9,6 +9,6 @@ export const GET = handle(localMail, async ({ request }) => {
   const { mail, loopback } = config()
   // a page elsewhere may have its own name lead to this machine, but not change what the browser says it asked for
   const asked = new URL(`http://${request.headers.get('host')}`).hostname
-  if (mail !== 'local' || !loopback || !loopbackNames.has(asked)) throw notFound('page')
+  if (mail.by !== 'local' || !loopback || !loopbackNames.has(asked)) throw notFound('page')
   return { mails: await keptMails() }
 })

@@ -4,7 +4,7 @@ import { handle } from '@/lib/http/handle'
 import { pictureResponse } from '@/lib/http/picture-response'
 import { newScene } from '@/scene/model/default-scene'
 import { presetById } from '@/scene/model/presets'
-import { drawScene, posterSize } from '../../../scene-picture'
+import { drawScene, posterSize } from '@/lib/pictures/scene-picture'
 
 export const GET = handle(presetPoster, async ({ request, params, query }) => {
   const preset = presetById(params.id)

@@ -1,11 +1,12 @@
-import { sharedPoster } from '@/lib/contracts/share-links'
+import { sharedPoster } from '@/lib/contracts/shared'
 import { handle } from '@/lib/http/handle'
+import { linkKeyOf } from '@/lib/http/link-key'
 import { pictureResponse } from '@/lib/http/picture-response'
 import { lookThroughShareLink } from '@/lib/services/open-share-link'
-import { drawScene, posterSize } from '../../../scene-picture'
+import { drawScene, posterSize } from '@/lib/pictures/scene-picture'
 
 export const GET = handle(sharedPoster, async ({ request, params, query }) => {
-  const { sceneId, version, document } = await lookThroughShareLink(params.token)
+  const { sceneId, version, document } = await lookThroughShareLink(linkKeyOf(request, params.token))
   return pictureResponse(request, `poster ${sceneId} ${version} ${query.theme}`, () =>
     drawScene(document, query.theme, posterSize),
   )

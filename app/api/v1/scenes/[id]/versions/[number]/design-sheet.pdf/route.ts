@@ -3,7 +3,7 @@ import { handle } from '@/lib/http/handle'
 import { printVersion } from '@/lib/services/print-design-sheet'
 import { sheetParts } from '@/lib/sheet/sheet-parts'
 import { fileResponse } from '../../../../../file-response'
-import { drawForPrint } from '../../../../../print-picture'
+import { drawForPrint } from '@/lib/pictures/print-picture'
 
 export const GET = handle(versionDesignSheet, async ({ person, params, query }) => {
   const bytes = await printVersion(

@@ -1,0 +1,1 @@
+export function contentPolicy(frames?: readonly string[]): string
