@@ -1,5 +1,5 @@
-import AxeBuilder from '@axe-core/playwright'
 import { expect, type Page } from '@playwright/test'
+import { expectNoBarriers, expectNoSidewaysScroll } from './support/barriers'
 
 /** Stands still at a known angle, typed into the flag of the strip. */
 async function still(page: Page, angle: string) {
@@ -44,16 +44,6 @@ export const benchPage = (page: Page) => ({
     await expect(page.getByRole('slider', { name: 'Crank angle' })).toHaveAttribute('aria-valuenow', angle)
     await expect(page.locator('.words')).toContainText(`Crank ${angle}°`)
   },
-  /** No barrier that a machine can see, of whatever weight; in one part of the page where only that has changed. */
-  async expectNoBarriers(within?: string) {
-    const axe = new AxeBuilder({ page })
-    const { violations } = await (within ? axe.include(within) : axe).analyze()
-    expect(violations.map(({ id, nodes }) => `${id}: ${nodes.map((node) => node.target).join(' ')}`)).toEqual(
-      [],
-    )
-  },
-  async expectNoSidewaysScroll() {
-    const wide = await page.evaluate(() => document.documentElement.scrollWidth - window.innerWidth)
-    expect(wide).toBeLessThanOrEqual(0)
-  },
+  expectNoBarriers: (within?: string) => expectNoBarriers(page, within),
+  expectNoSidewaysScroll: () => expectNoSidewaysScroll(page),
 })

@@ -6,6 +6,7 @@ import postgres from 'postgres'
 import { read, write, type Transaction } from '@/db/client'
 import { workshops } from '@/db/schema'
 import { migrate } from '@/db/migrate.mjs'
+import journal from '@/drizzle/meta/_journal.json'
 import { errorCode } from '@/lib/errors/as-problem'
 import { call } from './support/call'
 import { sceneOf } from './support/documents'
@@ -122,7 +123,7 @@ describe('write()', () => {
     const before = await state()
 
     // the save waits for this lock in its middle, where its backend is killed
-    const holder = await server.sql.reserve()
+    const holder = postgres(server.ownerUrl, { max: 1 })
     await holder`begin`
     await holder`lock table audit_log in share row exclusive mode`
     const save = call('POST', `/api/v1/scenes/${id}/versions`, {
@@ -136,7 +137,7 @@ describe('write()', () => {
     await kill((await waiting())[0].pid)
     const answer = await save
     await holder`rollback`
-    holder.release()
+    await holder.end()
 
     expect(answer.status).toBe(503)
     expect(await state()).toEqual(before)
@@ -177,16 +178,50 @@ describe('outside write()', () => {
 })
 
 describe('what the database itself refuses', () => {
-  const refused = async (statement: string) => codeOf(server.sql.unsafe(statement))
+  const refused = async (statement: string, sql = server.sql) => codeOf(sql.unsafe(statement))
+  const notAllowed = '42501'
 
-  it('scene_versions and audit_log take no update, delete or truncate', async () => {
+  it('the program’s role can neither change what is never changed nor lift the guard on it', async () => {
     const owner = await newOwner()
     await call('POST', '/api/v1/scenes', { cookie: owner.cookie, body: { document: sceneOf('i3-1000') } })
-    for (const table of ['scene_versions', 'audit_log']) {
-      expect(await refused(`update ${table} set created_at = now()`), table).toBe('23001')
-      expect(await refused(`delete from ${table}`), table).toBe('23001')
-      expect(await refused(`truncate ${table} cascade`), table).toBe('23001')
+    for (const table of ['audit_log', 'scene_versions', 'note_events', 'verdicts']) {
+      for (const statement of [
+        `update ${table} set created_at = now()`,
+        `delete from ${table}`,
+        `truncate ${table} cascade`,
+        `alter table ${table} add column more text`,
+        `alter table ${table} disable trigger all`,
+        `alter table ${table} owner to current_user`,
+        `drop table ${table} cascade`,
+        `create trigger mine before insert on ${table} for each row execute function refuse_change()`,
+        `create rule mine as on insert to ${table} do instead nothing`,
+        `create index mine on ${table} (created_at)`,
+      ]) {
+        expect(await refused(statement), statement).toBe(notAllowed)
+      }
     }
+    for (const statement of [
+      'drop schema public cascade',
+      'create schema mine',
+      'create table public.mine (n int)',
+      'create or replace function refuse_change() returns trigger language sql as $$ select 1 $$',
+      'drop function refuse_change cascade',
+      'set session_replication_role = replica',
+      'set role keeper',
+      'delete from drizzle.__drizzle_migrations',
+    ]) {
+      expect(await refused(statement), statement).toBe(notAllowed)
+    }
+  })
+
+  it('the owner of the tables is stopped by their triggers', async () => {
+    const keeper = postgres(server.ownerUrl, { max: 1, onnotice() {} })
+    for (const table of ['scene_versions', 'audit_log']) {
+      expect(await refused(`update ${table} set created_at = now()`, keeper), table).toBe('23001')
+      expect(await refused(`delete from ${table}`, keeper), table).toBe('23001')
+      expect(await refused(`truncate ${table} cascade`, keeper), table).toBe('23001')
+    }
+    await keeper.end()
   })
 
   it('a scene whose head is no version of it cannot be committed', async () => {
@@ -195,13 +230,44 @@ describe('what the database itself refuses', () => {
 })
 
 describe('migrate()', () => {
-  it('migrate() six at once on an empty database ends well six times', async () => {
-    const keeper = postgres(server.url, { max: 1, onnotice() {} })
-    await keeper.unsafe('drop schema public cascade; drop schema drizzle cascade; create schema public')
+  async function empty() {
+    const keeper = postgres(server.ownerUrl, { max: 1, onnotice() {} })
+    await keeper.unsafe(`
+      drop schema if exists public, drizzle, graphile_worker cascade;
+      create schema public authorization pg_database_owner; grant usage on schema public to public`)
     await keeper.end()
-    const results = await Promise.allSettled(Array.from({ length: 6 }, () => migrate(server.url)))
-    expect(results.map(({ status }) => status)).toEqual(Array(6).fill('fulfilled'))
+  }
+
+  it('migrate() six at once on an empty database ends well six times', async () => {
+    await empty()
+    const six = Array.from({ length: 6 }, () => migrate(server.url, server.ownerUrl))
+    expect(await Promise.all(six)).toEqual(Array(6).fill({ guarded: true }))
     const applied = await server.sql`select hash from drizzle.__drizzle_migrations`
-    expect(applied).toHaveLength(2)
+    expect(applied).toHaveLength(journal.entries.length)
+    expect(await server.sql`select * from graphile_worker.jobs`).toEqual([])
+  })
+
+  it('migrate() of the program’s role alone is content with what is current and refuses what is not', async () => {
+    expect(await migrate(server.url)).toEqual({ guarded: true })
+    await empty()
+    await expect(migrate(server.url)).rejects.toThrow('The role app may not migrate the database.')
+  })
+
+  it('migrate() with one role for everything says that the program is not kept from its tables', async () => {
+    await empty()
+    expect(await migrate(server.ownerUrl)).toEqual({ guarded: false })
+  })
+
+  it('migrate() takes a database over that belonged to the program', async () => {
+    await empty()
+    const keeper = postgres(server.ownerUrl, { max: 1, onnotice() {} })
+    const [{ name }] = await keeper`select current_database() as name`
+    await keeper`alter database ${keeper(name)} owner to app`
+    await migrate(server.url)
+    await keeper.end()
+    expect(await codeOf(server.sql`alter table audit_log add column mine text`)).toBe('none')
+    expect(await migrate(server.url, server.ownerUrl)).toEqual({ guarded: true })
+    expect(await codeOf(server.sql`alter table audit_log drop column mine`)).toBe('42501')
+    expect(await codeOf(server.sql`select * from scenes`)).toBe('none')
   })
 })

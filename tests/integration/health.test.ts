@@ -13,14 +13,15 @@ describe('GET /health', () => {
   })
 
   it('GET /health is 503 when a migration is missing, and when one is there that we do not know', async () => {
-    const [last] =
-      await server.sql`select * from drizzle.__drizzle_migrations order by created_at desc limit 1`
-    await server.sql`delete from drizzle.__drizzle_migrations where id = ${last.id}`
+    const keeper = postgres(server.ownerUrl, { max: 1 })
+    const [last] = await keeper`select * from drizzle.__drizzle_migrations order by created_at desc limit 1`
+    await keeper`delete from drizzle.__drizzle_migrations where id = ${last.id}`
     expect((await health()).status).toBe(503)
-    await server.sql`insert into drizzle.__drizzle_migrations (hash, created_at) values ('later', 99999999999999)`
+    await keeper`insert into drizzle.__drizzle_migrations (hash, created_at) values ('later', 99999999999999)`
     expect((await health()).status).toBe(503)
-    await server.sql`delete from drizzle.__drizzle_migrations where hash = 'later'`
-    await server.sql`insert into drizzle.__drizzle_migrations ${server.sql(last)}`
+    await keeper`delete from drizzle.__drizzle_migrations where hash = 'later'`
+    await keeper`insert into drizzle.__drizzle_migrations ${keeper(last)}`
+    await keeper.end()
     expect((await health()).status).toBe(200)
   })
 

@@ -75,7 +75,7 @@ async function run(url: string, statement: string) {
   try {
     return await sql.unsafe(statement)
   } finally {
-    await sql.end()
+    await sql.end({ timeout: 5 })
   }
 }
 
@@ -113,13 +113,13 @@ describe('npm start -- --database-only', () => {
   it('killed hard, the next start stops what was left and finds what was written', async () => {
     const folder = dataFolder()
     const first = await start(folder)
-    await run(first.url, 'create table kept (n int); insert into kept values (7)')
+    await run(first.url, `insert into seeds (name) values ('kept')`)
     const [before] = servers(folder)
     await first.stop('SIGKILL')
     expect(servers(folder)).toEqual([before])
 
     const second = await start(folder)
-    expect(await run(second.url, 'select n from kept')).toMatchObject([{ n: 7 }])
+    expect(await run(second.url, 'select name from seeds')).toMatchObject([{ name: 'kept' }])
     expect(servers(folder)).toHaveLength(1)
     expect(servers(folder)).not.toContain(before)
     expect(portOf(second.url)).toBe(portOf(first.url))
@@ -128,16 +128,18 @@ describe('npm start -- --database-only', () => {
   it('with both killed in the middle of their work, the next start recovers what was committed', async () => {
     const folder = dataFolder()
     const first = await start(folder)
-    await run(first.url, 'create table kept (n int); insert into kept values (7)')
+    await run(first.url, `insert into seeds (name) values ('kept')`)
     // a backend that is still at work when its server goes delays the next server
     const busy = run(first.url, 'select count(*) from generate_series(1, 1e9)').catch(() => 'cut off')
+    const atWork = `select 1 from pg_stat_activity where query like 'select count%' and state = 'active'`
+    await expect.poll(() => run(first.url, atWork), { timeout: 60_000 }).toHaveLength(1)
     const [before] = servers(folder)
     await first.stop('SIGKILL')
     process.kill(before, 'SIGKILL')
 
     const second = await start(folder)
     expect(await busy).toBe('cut off')
-    expect(await run(second.url, 'select n from kept')).toMatchObject([{ n: 7 }])
+    expect(await run(second.url, 'select name from seeds')).toMatchObject([{ name: 'kept' }])
   })
 
   it('a server that ends by itself ends the start with 1', async () => {
@@ -178,10 +180,10 @@ describe('npm start -- --database-only', () => {
     const folder = dataFolder(0o700)
     const first = await start(folder)
     expect(existsSync(join(folder, 'database.elsewhere'))).toBe(isRoot)
-    await run(first.url, 'create table kept (n int)')
+    await run(first.url, `insert into seeds (name) values ('kept')`)
     await first.stop('SIGINT')
     expect(servers(folder)).toEqual([])
     const second = await start(folder)
-    expect(await run(second.url, 'select n from kept')).toEqual([])
+    expect(await run(second.url, 'select name from seeds')).toMatchObject([{ name: 'kept' }])
   })
 })

@@ -12,6 +12,8 @@ interface Server {
   sql: postgres.Sql
   dataFolder: string
   url: string
+  /** Signs in as the database's owner, not as the program. */
+  ownerUrl: string
 }
 
 /** A database and a data folder of its own for a test file; settings as given. */
@@ -22,6 +24,7 @@ export function useServer(settings: Record<string, string> = {}): Server {
     const database = await freshDatabase()
     drop = database.drop
     server.url = database.url
+    server.ownerUrl = database.ownerUrl
     server.dataFolder = mkdtempSync(join(tmpdir(), 'counterthrow-data-'))
     server.sql = postgres(database.url, { max: 2, onnotice() {} })
     Object.assign(process.env, {

@@ -7,6 +7,7 @@ import { buildStageModel } from '@/scene/stage/build-stage-model'
 import { createDetails } from '@/scene/stage/create-details'
 import { createStage } from '@/scene/stage/create-stage'
 import { cutRig } from '@/scene/stage/cut-rig'
+import { createPinLayer } from '@/scene/stage/pins'
 import type { NamedView, RendererKind } from '@/scene/stage/types'
 
 /** A page with nothing but a stage, steered by its address and by `window.harness`. */
@@ -58,7 +59,7 @@ const mount = (element: HTMLElement, pane?: NamedView) => {
     element,
     clock,
     {
-      onPick: tell('pick'),
+      onPick: (part) => tell('pick')(part),
       onHover: tell('hover'),
       onBalloon: tell('balloon'),
       onCamera: tell('camera'),
@@ -79,6 +80,12 @@ const mount = (element: HTMLElement, pane?: NamedView) => {
 }
 const ticks = { count: 0 }
 const stage = mount(host)
+const pins = createPinLayer()
+pins.listen((number) => tell('pin')(number))
+if (ask.has('pins')) {
+  stage.enrich(pins.details)
+  pins.set(JSON.parse(ask.get('pins') ?? '[]'))
+}
 const view = ask.get('view')
 if (view) stage.view(view as NamedView)
 
@@ -87,6 +94,6 @@ const enrich = () => {
   stage.setModel(model)
 }
 
-const harness = { stage, enrich, clock, events, ticks, model, look, mount, readModel, host }
+const harness = { stage, pins, enrich, clock, events, ticks, model, look, mount, readModel, host }
 export type Harness = typeof harness
 Object.assign(window, { harness })

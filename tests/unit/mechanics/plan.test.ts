@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { buildInstant, buildPlan, fillInstant } from '@/lib/mechanics/plan'
-import { DEG, inline, presetDocument, presetTrain, RPM, trainOf } from './trains'
+import { DEG, inline, presetDocument, presetTrain, trainOf } from './trains'
 
 describe('buildPlan(train, speed)', () => {
   it('refuses a speed that is not a number of 0 or more', () => {

@@ -1,6 +1,6 @@
 import { readFileSync } from 'node:fs'
 import { describe, expect, it } from 'vitest'
-import { inkThemes } from '@/app/api/v1/scene-picture'
+import { inkThemes } from '@/lib/pictures/scene-picture'
 
 const css = readFileSync('app/tokens.css', 'utf8')
 

@@ -39,10 +39,12 @@ describe('openApiDocument()', () => {
     expect(described.sort()).toEqual(exported.flat().sort())
   })
 
-  it('openApiDocument() says `security: []` of what strangers may call, and `session` of everything else', () => {
+  it('openApiDocument() says how each call is opened: not at all, by a session alone, or by a token too', () => {
+    expect(document.components?.securitySchemes?.token).toMatchObject({ type: 'http', scheme: 'bearer' })
     for (const operation of allOperations) {
       const item = document.paths?.[operation.path] as Record<string, { security?: unknown }>
-      const expected = operation.for === 'anyone' ? [] : [{ session: [] }]
+      const byPerson = operation.atPage ? [{ session: [] }] : [{ session: [] }, { token: [] }]
+      const expected = operation.for === 'anyone' ? [] : byPerson
       expect(item[operation.method.toLowerCase()].security, operation.id).toEqual(expected)
     }
   })
