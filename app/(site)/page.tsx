@@ -26,12 +26,7 @@ export default async function HomePage() {
   const { train } = presetById(shown)!
   const scene = newScene(train)
   return (
-    <Sheet
-      current="none"
-      className="home"
-      person={person && sheetPerson(person)}
-      signOut={signOutAction}
-    >
+    <Sheet current="none" className="home" person={person && sheetPerson(person)} signOut={signOutAction}>
       <section className="stage" aria-label="Drawing">
         <LiveScene
           scene={scene}

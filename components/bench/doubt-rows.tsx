@@ -64,13 +64,7 @@ function DoubtNote({ doubt }: { doubt: Doubt }) {
       {reason === null ? (
         <div className="row">
           {mend ? (
-            <button
-              type="button"
-              className="btn sm"
-              onClick={() =>
-                session.edit(inTrain(mend.changes))
-              }
-            >
+            <button type="button" className="btn sm" onClick={() => session.edit(inTrain(mend.changes))}>
               {mend.label}
             </button>
           ) : null}
