@@ -64,8 +64,8 @@ export async function sendTo<T = void>(
   }).catch(() => {
     throw offline()
   })
-  if (response.ok)
-    return (response.status === 204 || response.status === 202 ? undefined : await response.json()) as T
+  const answers = response.headers.get('content-type')?.includes('json')
+  if (response.ok) return (answers ? await response.json() : undefined) as T
   const problem = await response.json().catch(() => null)
   throw new Refusal(response.status, problem?.detail ? problem : unlikely)
 }

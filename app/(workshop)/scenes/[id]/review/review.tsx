@@ -5,6 +5,7 @@ import { rowNumber } from '@/components/bench/row-number'
 import { AngleRule } from '@/components/drawing/angle-rule'
 import { PlayButtons } from '@/components/drawing/play-buttons'
 import { useDrawing } from '@/components/drawing/use-drawing'
+import { ExportNotes } from '@/components/notes/export-notes'
 import { NoteFlags } from '@/components/notes/note-flags'
 import { NoteList } from '@/components/notes/note-list'
 import { TouchedNotes } from '@/components/notes/touched-notes'
@@ -39,6 +40,7 @@ export function Review({ opened, workshop, note }: Props) {
   const [stage, setStage] = useState<Stage | null>(null)
   const [changed, setChanged] = useState<readonly string[]>([])
   const comparison = useComparison(scene.id, version)
+  const [exporting, setExporting] = useState(false)
   const [renderer, setRenderer] = useState<RendererKind | null>(null)
   const { id: sceneId, workshopId, headVersion } = scene
   const desk = useNoteDesk({
@@ -97,9 +99,9 @@ export function Review({ opened, workshop, note }: Props) {
           <a className="btn" href={`/bench?scene=${scene.id}`}>
             To the bench
           </a>
-          <a className="btn" href={`/api/v1/scenes/${sceneId}/notes.csv?version=${version.number}`}>
-            Export notes
-          </a>
+          <button type="button" className="btn" onClick={() => setExporting(true)}>
+            Export notes…
+          </button>
           {may.includes('note.write') ? (
             <button
               type="button"
@@ -112,6 +114,9 @@ export function Review({ opened, workshop, note }: Props) {
           ) : null}
         </TitleActions>
       </TitleBlock>
+      {exporting ? (
+        <ExportNotes sceneId={sceneId} version={version.number} onClose={() => setExporting(false)} />
+      ) : null}
     </Slips>
   )
 }
