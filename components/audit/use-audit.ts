@@ -1,6 +1,6 @@
 'use client'
 
-import useSWRInfinite from 'swr/infinite'
+import { usePages } from '@/components/ui/use-pages'
 import type { AuditFilters, listAudit } from '@/lib/contracts/audit-log'
 import { addressOf, readAddress } from '@/lib/contracts/call'
 import type { AnswerOf } from '@/lib/contracts/operation'
@@ -12,17 +12,9 @@ export const auditAddress = (workshop: string, kind: '' | '.csv' | '.json', quer
 
 /** The audit log as far back as somebody asked. */
 export function useAudit(workshop: string, filters: AuditFilters) {
-  const { data, error, size, setSize } = useSWRInfinite<Page, Error>(
-    (index: number, last: Page | null) =>
-      last && last.next === null
-        ? null
-        : auditAddress(workshop, '', { ...filters, before: index > 0 ? last?.next : undefined }),
+  const { pages, error, more } = usePages<Page>(
+    (before) => auditAddress(workshop, '', { ...filters, before }),
     readAddress,
-    { keepPreviousData: true, dedupingInterval: 0 },
   )
-  return {
-    entries: data?.flatMap((page) => page.entries) ?? null,
-    error,
-    more: data?.at(-1)?.next ? () => void setSize(size + 1) : null,
-  }
+  return { entries: pages?.flatMap((page) => page.entries) ?? null, error, more }
 }

@@ -1,8 +1,8 @@
 'use client'
 
 import { useId, useState } from 'react'
-import useSWRInfinite from 'swr/infinite'
 import { Segmented } from '@/components/ui/segmented'
+import { usePages } from '@/components/ui/use-pages'
 import type { Operation } from '@/lib/auth/access'
 import { addressOf, call, readAddress, type Refusal } from '@/lib/contracts/call'
 import type { listMails, OutboxMail, resendMail } from '@/lib/contracts/mail'
@@ -36,20 +36,11 @@ function Outbox({ workshopId, may }: Props) {
   const id = useId()
   const [show, setShow] = useState<Show>('open')
   const [refused, setRefused] = useState<string | null>(null)
-  const { data, error, size, setSize, mutate } = useSWRInfinite<Page, Error>(
-    (index: number, before: Page | null) =>
-      before && !before.next
-        ? null
-        : addressOf(
-            '/api/v1/mails',
-            {},
-            { workshop: workshopId, show, after: index ? (before?.next ?? undefined) : undefined },
-          ),
+  const { pages, error, more, refresh } = usePages<Page>(
+    (after) => addressOf('/api/v1/mails', {}, { workshop: workshopId, show, after }),
     readAddress,
-    { keepPreviousData: true },
   )
-  const mails = data?.flatMap((page) => page.mails) ?? []
-  const more = data?.at(-1)?.next ?? null
+  const mails = pages?.flatMap((page) => page.mails) ?? []
 
   const sendAgain = async ({ id }: OutboxMail) => {
     setRefused(null)
@@ -59,7 +50,7 @@ function Outbox({ workshopId, may }: Props) {
       const { message, problem } = cause as Refusal
       setRefused(`${message} ${problem.cure}`)
     }
-    await mutate()
+    await refresh()
   }
 
   return (
@@ -76,12 +67,12 @@ function Outbox({ workshopId, may }: Props) {
           onChange={setShow}
         />
       </div>
-      {refused || (error && !data) ? (
+      {refused || (error && !pages) ? (
         <p className="refused" role="alert">
           {refused ?? error?.message}
         </p>
       ) : null}
-      {data && mails.length === 0 ? (
+      {pages && mails.length === 0 ? (
         <p className="cap">{show === 'open' ? 'Nothing waits and nothing failed.' : 'No mail yet.'}</p>
       ) : null}
       {mails.length > 0 ? (
@@ -128,7 +119,7 @@ function Outbox({ workshopId, may }: Props) {
         </div>
       ) : null}
       {more ? (
-        <button type="button" className="btn" onClick={() => void setSize(size + 1)}>
+        <button type="button" className="btn" onClick={more}>
           Earlier mails
         </button>
       ) : null}

@@ -2,7 +2,7 @@
 
 import { useMemo } from 'react'
 import useSWR, { useSWRConfig } from 'swr'
-import useSWRInfinite from 'swr/infinite'
+import { usePages } from '@/components/ui/use-pages'
 import { addressOf, call, readAddress, Refusal } from '@/lib/contracts/call'
 import type { AnswerOf, OperationContract } from '@/lib/contracts/operation'
 import type {
@@ -41,13 +41,9 @@ const many = 200
 export function useNoteList(sceneId: string, version: number, choice: NoteChoice) {
   const { state, ...rest } = choice
   const query = { version, limit: many, ...rest, state: state === 'all' ? undefined : state }
-  const { data, error, isLoading, size, setSize, mutate } = useSWRInfinite<Page, Error>(
-    (index: number, before: Page | null) =>
-      before && before.next === null
-        ? null
-        : addressOf(listPath, { id: sceneId }, { ...query, after: index ? before?.next : undefined }),
+  const { pages, error, loading, more, refresh } = usePages<Page>(
+    (after) => addressOf(listPath, { id: sceneId }, { ...query, after }),
     readAddress,
-    { keepPreviousData: true, revalidateFirstPage: true },
   )
   // what stands beside the choice of states counts all states of whatever else is chosen
   const counted = useSWR<Page, Error>(
@@ -55,15 +51,13 @@ export function useNoteList(sceneId: string, version: number, choice: NoteChoice
     readAddress,
     { keepPreviousData: true },
   )
-  const notes = useMemo(() => data?.flatMap((page) => page.notes) ?? [], [data])
+  const notes = useMemo(() => pages?.flatMap((page) => page.notes) ?? [], [pages])
   return {
     notes,
     counts: counted.data?.counts ?? null,
-    authors: data?.[0]?.authors ?? [],
-    loading: isLoading,
-    error,
-    refresh: () => void mutate(),
-    more: data && data[data.length - 1]?.next ? () => setSize(size + 1) : null,
+    authors: pages?.[0]?.authors ?? [],
+    ...{ loading, error, more },
+    refresh: () => void refresh(),
   }
 }
 

@@ -3,10 +3,11 @@
 import { useState } from 'react'
 import { TitleActions, TitleBlock, TitleCell } from '@/components/shell/title-block'
 import { goTo } from '@/components/ui/go-to'
+import { usePages } from '@/components/ui/use-pages'
 import { Slips, useSlip } from '@/components/ui/slips'
 import { Tabs } from '@/components/ui/tabs'
 import type { Operation, Role } from '@/lib/auth/access'
-import { call, Refusal } from '@/lib/contracts/call'
+import { addressOf, call, readAddress, Refusal } from '@/lib/contracts/call'
 import type * as inviting from '@/lib/contracts/invitations'
 import type { AnswerOf } from '@/lib/contracts/operation'
 import type * as contracts from '@/lib/contracts/workshops'
@@ -15,7 +16,6 @@ import { InvitationTable } from './invitation-table'
 import { InviteDialog } from './invite-dialog'
 import { PeopleTable } from './people-table'
 import { TransferDialog } from './transfer-dialog'
-import { usePages } from './use-pages'
 
 interface Props {
   workshop: { id: string; name: string }
@@ -37,13 +37,17 @@ function Register({ workshop, role, may }: Props) {
   const [leaf, setLeaf] = useState<Leaf>('people')
   const [asking, setAsking] = useState<Asking>(null)
   const base = `/api/v1/workshops/${workshop.id}`
-  const people = usePages<AnswerOf<typeof contracts.listPeople>>(`${base}/people`)
+  const people = usePages<AnswerOf<typeof contracts.listPeople>>(
+    (after) => addressOf(`${base}/people`, {}, { limit: 50, after }),
+    readAddress,
+  )
   const invites = may.includes('person.invite')
   const invitations = usePages<AnswerOf<typeof inviting.listInvitations>>(
-    invites ? `${base}/invitations` : null,
+    (after) => (invites ? addressOf(`${base}/invitations`, {}, { limit: 50, after }) : null),
+    readAddress,
   )
-  const members = people.pages.flatMap((page) => page.people)
-  const open = invitations.pages.flatMap((page) => page.invitations)
+  const members = people.pages?.flatMap((page) => page.people) ?? []
+  const open = invitations.pages?.flatMap((page) => page.invitations) ?? []
   const others = members.filter(({ you }) => !you)
   // told only when everybody is in view; the server holds it in any case
   const alone = !people.more && members.filter((member) => member.role === 'owner').length === 1

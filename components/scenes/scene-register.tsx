@@ -157,7 +157,7 @@ function Register({ workshop, may }: Props) {
         )}
         {more ? (
           <p className="reg-more">
-            <button type="button" className="btn" onClick={() => void more()}>
+            <button type="button" className="btn" onClick={more}>
               Show more scenes
             </button>
           </p>

@@ -1,8 +1,9 @@
 'use client'
 
+import { usePages } from '@/components/ui/use-pages'
+import { addressOf, readAddress } from '@/lib/contracts/call'
 import type { ShareLink } from '@/lib/contracts/share-links'
 import { openingsAddress, type OpeningsPage } from './use-links'
-import { useLog } from './use-log'
 
 interface Props {
   link: ShareLink
@@ -21,7 +22,10 @@ const spent = (seconds: number) =>
 /** When a link was opened, on what kind of device, and for how long each part of the page was in view. */
 export function OpeningsLog({ link, onErase }: Props) {
   const address = openingsAddress(link.id)
-  const { pages, error, more, refresh } = useLog<OpeningsPage>(address)
+  const { pages, error, more, refresh } = usePages<OpeningsPage>(
+    (before) => addressOf(address, {}, { limit: 50, before }),
+    readAddress,
+  )
   if (error) return <p className="msg">{error.message}</p>
   if (!pages) return <p className="setting-out">Setting out</p>
   const openings = pages.flatMap((page) => page.openings)

@@ -1,8 +1,9 @@
 'use client'
 
+import { usePages } from '@/components/ui/use-pages'
+import { addressOf, readAddress } from '@/lib/contracts/call'
 import type { ShareLink } from '@/lib/contracts/share-links'
 import { questionsAddress, type QuestionsPage } from './use-links'
-import { useLog } from './use-log'
 
 interface Props {
   link: ShareLink
@@ -13,7 +14,10 @@ const when = new Intl.DateTimeFormat('en-GB', { dateStyle: 'medium', timeStyle: 
 
 /** What visitors asked on a link's page, with what was before them. */
 export function QuestionsLog({ link, onErase }: Props) {
-  const { pages, error, more, refresh } = useLog<QuestionsPage>(questionsAddress(link.id))
+  const { pages, error, more, refresh } = usePages<QuestionsPage>(
+    (before) => addressOf(questionsAddress(link.id), {}, { limit: 50, before }),
+    readAddress,
+  )
   if (error) return <p className="msg">{error.message}</p>
   if (!pages) return <p className="setting-out">Setting out</p>
   const questions = pages.flatMap((page) => page.questions)

@@ -2,8 +2,8 @@
 
 import Link from 'next/link'
 import { useState } from 'react'
-import useSWRInfinite from 'swr/infinite'
 import { Tabs } from '@/components/ui/tabs'
+import { usePages } from '@/components/ui/use-pages'
 import { addressOf, readAddress } from '@/lib/contracts/call'
 import type { AnswerOf } from '@/lib/contracts/operation'
 import type { ListedReview, listReviews, ReviewList } from '@/lib/contracts/verdicts'
@@ -28,14 +28,11 @@ const nothing: Record<ReviewList, string> = {
 export function ReviewLists({ workshop, judges }: { workshop: string; judges: boolean }) {
   const shown = judges ? lists : lists.slice(1)
   const [list, setList] = useState<ReviewList>(shown[0].value)
-  const { data, error, isLoading, size, setSize, mutate } = useSWRInfinite<Page, Error>(
-    (index: number, before: Page | null) =>
-      before && !before.next
-        ? null
-        : addressOf('/api/v1/reviews', {}, { workshop, list, after: index ? before?.next : undefined }),
+  const { pages, error, loading, more, refresh } = usePages<Page>(
+    (after) => addressOf('/api/v1/reviews', {}, { workshop, list, after }),
     readAddress,
   )
-  const reviews = data?.flatMap((page) => page.reviews) ?? []
+  const reviews = pages?.flatMap((page) => page.reviews) ?? []
   return (
     <section className="reg" aria-label="Reviews">
       <div className="regtop">
@@ -47,7 +44,7 @@ export function ReviewLists({ workshop, judges }: { workshop: string; judges: bo
             <p>
               <b>The list is out of reach.</b>
               <br />
-              <button type="button" className="btn txt" onClick={() => void mutate()}>
+              <button type="button" className="btn txt" onClick={() => void refresh()}>
                 Try now
               </button>
             </p>
@@ -71,12 +68,12 @@ export function ReviewLists({ workshop, judges }: { workshop: string; judges: bo
           </table>
         ) : (
           <div className="state">
-            <p>{isLoading ? 'Setting out the list' : nothing[list]}</p>
+            <p>{loading ? 'Setting out the list' : nothing[list]}</p>
           </div>
         )}
-        {data?.at(-1)?.next ? (
+        {more ? (
           <p className="reg-more">
-            <button type="button" className="btn" onClick={() => void setSize(size + 1)}>
+            <button type="button" className="btn" onClick={more}>
               Show more
             </button>
           </p>

@@ -1,4 +1,4 @@
-import useSWRInfinite from 'swr/infinite'
+import { usePages } from '@/components/ui/use-pages'
 import { addressOf, readAddress } from '@/lib/contracts/call'
 import type { AnswerOf } from '@/lib/contracts/operation'
 import type { listVersions } from '@/lib/contracts/scenes'
@@ -7,23 +7,14 @@ type Page = AnswerOf<typeof listVersions>
 
 /** Versions of a scene, the newest first, a page at a time as the database cuts it. */
 export function useVersions(sceneId: string) {
-  const { data, error, size, setSize, mutate } = useSWRInfinite<Page, Error>(
-    (index: number, before: Page | null) =>
-      before && before.next === null
-        ? null
-        : addressOf(
-            '/api/v1/scenes/{id}/versions',
-            { id: sceneId },
-            { before: index ? before?.next : undefined },
-          ),
+  const { pages, error, more, refresh } = usePages<Page>(
+    (before) => addressOf('/api/v1/scenes/{id}/versions', { id: sceneId }, { before }),
     readAddress,
-    { keepPreviousData: true, shouldRetryOnError: false },
+    { shouldRetryOnError: false },
   )
   return {
-    versions: data?.flatMap((page) => page.versions) ?? [],
-    loading: !data && !error,
-    error,
-    more: data && data[data.length - 1].next !== null ? () => setSize(size + 1) : null,
-    refresh: () => mutate(),
+    versions: pages?.flatMap((page) => page.versions) ?? [],
+    loading: !pages && !error,
+    ...{ error, more, refresh },
   }
 }

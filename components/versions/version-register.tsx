@@ -85,7 +85,7 @@ function Register({ sceneId, title, may, numberOf }: Props) {
         )}
         {more ? (
           <p className="reg-more">
-            <button type="button" className="btn" onClick={() => void more()}>
+            <button type="button" className="btn" onClick={more}>
               Show older versions
             </button>
           </p>

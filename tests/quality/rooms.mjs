@@ -52,7 +52,7 @@ export const rooms = {
   ui: {
     folder: 'components/ui',
     rooms: ['tables'],
-    packages: [...react, 'next', 'd3-scale', 'd3-shape'],
+    packages: [...react, 'next', 'swr', 'd3-scale', 'd3-shape'],
   },
   shell: { folder: 'components/shell', rooms: ['ui'], packages: [...react, 'next'] },
   drawing: {
