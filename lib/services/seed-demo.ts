@@ -61,7 +61,10 @@ const insertPeople = (passwordHash: string) => async (tx: Transaction) => {
     .values(demo.workshops.map((name) => ({ name })))
     .returning()
   for (const { name, email, roles } of demo.people) {
-    const [user] = await tx.insert(users).values({ name, email, passwordHash }).returning()
+    // memberships that begin together do not say which workshop is before them: the first that is named
+    const [before] = rows.filter((row) => row.name === Object.keys(roles)[0])
+    const person = { name, email, passwordHash, workshopId: before.id }
+    const [user] = await tx.insert(users).values(person).returning()
     for (const workshop of rows) {
       const role = roles[workshop.name]
       if (!role) continue

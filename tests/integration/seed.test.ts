@@ -1,6 +1,7 @@
 import { beforeAll, describe, expect, it } from 'vitest'
 import { seed } from '@/db/seed.mjs'
 import type { NoteSummary } from '@/lib/contracts/notes'
+import type { PersonAnswer } from '@/lib/contracts/people'
 import type { SceneSummary } from '@/lib/contracts/scenes'
 import { call } from './support/call'
 import { mailsTo } from './support/mails'
@@ -67,6 +68,10 @@ describe('seed()', () => {
 
   it('seed() leaves versions approved with remarks, approved, superseded and in review', async () => {
     const cookie = await cookieFor('ines@quillmarsh.example')
+    const session = await call('GET', '/api/v1/auth/session', { cookie })
+    const { person } = session.body as { person: PersonAnswer }
+    // of two workshops the one that is named first is before her
+    expect(person.workshops.find(({ id }) => id === person.workshop)?.name).toBe('Larkspur Crankworks')
     const heads = Object.fromEntries((await scenesOf(cookie)).map(({ title, state }) => [title, state]))
     expect(heads).toMatchObject({
       '90° V8 5.0 L, cross plane': 'approved-with-remarks',
