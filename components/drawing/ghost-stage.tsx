@@ -2,6 +2,7 @@
 
 import { useMemo } from 'react'
 import type { Rig } from '@/scene/frame/types'
+import { pastGhost } from '@/scene/stage/past-ghost'
 import { StageView, type StageViewProps } from './stage-view'
 
 /**
@@ -15,6 +16,9 @@ export interface GhostStageProps extends StageViewProps {
 }
 
 export function GhostStage({ older, model, ...view }: GhostStageProps) {
-  const shown = useMemo(() => (older ? { ...model, past: older } : model), [model, older])
+  const shown = useMemo(
+    () => (older ? { ...model, past: { rig: older, ghost: pastGhost } } : model),
+    [model, older],
+  )
   return <StageView {...view} model={shown} />
 }

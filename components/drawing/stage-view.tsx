@@ -43,7 +43,7 @@ export function StageView(props: StageViewProps) {
     () => ({
       ...whole,
       rig: cutRig(whole.rig, sectionAxial),
-      past: whole.past && cutRig(whole.past, sectionAxial),
+      past: whole.past && { ...whole.past, rig: cutRig(whole.past.rig, sectionAxial) },
     }),
     [whole, sectionAxial],
   )

@@ -9,7 +9,7 @@ import { paintArrow, paintRing, type ArrowForm, type Pen } from './paint-arrow'
 import { paintDiamond } from './paint-diamond'
 import { paintPath, type PathForm } from './paint-path'
 import type { Palette } from './palette'
-import { buildGhost, paintGhost, type Ghost } from './past-ghost'
+import type { Ghost } from './past-ghost'
 import type { ForcedPicture } from './forced-picture'
 import { scaleBar, type ScaleBar } from './scale-bar'
 import { createPath, fillCoupleArc, fillRotation, type SpacePath } from './space-paths'
@@ -51,7 +51,7 @@ export function createOverlay(picture: ForcedPicture): Overlay {
   fillRotation(rotation, rig)
   return {
     picture,
-    past: model.past ? buildGhost(model.past, rig) : null,
+    past: model.past ? model.past.ghost.build(model.past.rig, rig) : null,
     arrows: buildArrows(rig, model.plan.train),
     metresPerNewton,
     orbit: { points: orbit, count: orbit.length / 3 },
@@ -71,7 +71,10 @@ export function paintOverlay(pen: Pen, overlay: Overlay, view: OverlayView): voi
   const { overlays } = look
   pen.clearRect(0, 0, width, height)
   const { past, picture } = overlay
-  if (past) paintGhost(pen, past, picture.instant.angle, picture.frame, palette, look.hidden, width, height)
+  if (past) {
+    const { model, instant, frame } = picture
+    model.past?.ghost.paint(pen, past, instant.angle, frame, palette, look.hidden, width, height)
+  }
   if (overlays.labels) paintSpacePath(pen, overlay, view, overlay.rotation, 'rotation')
   if (overlays.orbit) paintSpacePath(pen, overlay, view, overlay.orbit, 'orbit')
   if (overlays.shaking) paintCouple(pen, overlay, view)

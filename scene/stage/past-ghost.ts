@@ -167,3 +167,7 @@ function follow({ edges, open, first, around }: EdgeNet, vertex: number): number
   }
   return -1
 }
+
+/** How an older version is drawn, for a model that has one. */
+export const pastGhost = { build: buildGhost, paint: paintGhost }
+export type PastGhost = typeof pastGhost

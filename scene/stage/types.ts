@@ -5,12 +5,16 @@ import type { Overlays } from '@/scene/model/scene'
 import type { Clock } from '@/scene/session/clock'
 import type { Eye } from './eye'
 import type { Palette } from './palette'
+import type { PastGhost } from './past-ghost'
 
 /** All that a picture needs to move. */
 export interface MovingModel {
   rig: Rig
-  /** An older version of the engine, drawn over it as a ghost at the same crank angle. */
-  past?: Rig
+  /**
+   * An older version of the engine, drawn over it at the same crank angle by what is handed in with it: a page that never
+   * draws one does not fetch how.
+   */
+  past?: { rig: Rig; ghost: PastGhost }
 }
 
 /** Everything one stage moves its parts with, in buffers that live as long as the model does. */
